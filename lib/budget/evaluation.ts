@@ -1,0 +1,113 @@
+import type { Basis, Grade, Owner, SectionName, Statistic, Verdict } from './schema'
+
+/** What evaluate() returns. Losses are positive decibels; null means unknown, never zero. */
+export type Evaluation = {
+  readonly engine: string
+  readonly signalling: SignallingEvaluation
+  /** Channel order: lines and the planes between them. */
+  readonly rows: readonly ({ readonly plane: string } | { readonly line: string })[]
+  readonly lines: Readonly<Record<string, LineEvaluation>>
+  readonly allowances: readonly AllowanceEvaluation[]
+  /** The worst of the allowances in the order over, undecided, tight, inside; undecided with none. */
+  readonly verdict: Verdict
+  readonly flags: readonly Flag[]
+}
+
+export type SignallingEvaluation = {
+  readonly lineRate: number | null
+  readonly bitsPerSymbol: number | null
+  readonly symbolRate: number | null
+  readonly unitInterval: number | null
+  readonly nyquist: number | null
+  /** What the rate includes, in words. */
+  readonly statement: string
+}
+
+/** One line, at the Nyquist frequency of the budget and beside each allowance's sum. */
+export type LineEvaluation = {
+  readonly id: string
+  readonly loss: LossAt
+  readonly owner: Owner | null
+  readonly basis: Basis | null
+  readonly grade: Grade
+  /** Physical length in metres where the line has one, for drawing. */
+  readonly lengthM: number | null
+  readonly group: string
+}
+
+/** A loss at one frequency, or why there is none. */
+export type LossAt = {
+  readonly atHz: number | null
+  readonly nominalDb: number | null
+  readonly lowDb: number | null
+  readonly highDb: number | null
+  /** How the number got to this frequency. */
+  readonly by: 'stated' | 'moved' | 'table' | 'computed' | null
+}
+
+export type AllowanceEvaluation = {
+  readonly id: string
+  readonly name: string
+  readonly limitDb: number | null
+  readonly atHz: number | null
+  readonly requiredMarginDb: number
+  readonly judged: {
+    readonly corner: string
+    readonly statistic: Statistic
+    readonly lane: number | null
+    readonly lanes: number
+  }
+  readonly verdict: Verdict
+  /** The verdict in words, as every screen and document shows it. */
+  readonly words: string
+  readonly reasons: readonly string[]
+  /** Planes found in the budget, in channel order, or null. */
+  readonly from: string | null
+  readonly to: string | null
+  /** Sum of the lines that have a number, in the judged conditions; overlap lines subtract. */
+  readonly knownDb: number
+  /** The whole loss in the judged conditions; null while a line between the planes has no number. */
+  readonly lossDb: number | null
+  readonly marginDb: number | null
+  /** What is left of the limit for the lines that have no number yet. */
+  readonly leftDb: number | null
+  readonly undecidedLines: readonly string[]
+  readonly nominalDb: number | null
+  readonly worstDb: number | null
+  /** Three standard deviations of the sum, grouped. */
+  readonly rssDb: number | null
+  readonly byBasis: Readonly<Record<Basis | 'unsaid', number>>
+  /** Lines between the planes in channel order, with what each counts here. */
+  readonly lines: readonly CountedLine[]
+  readonly shares: readonly ShareUse[]
+}
+
+export type CountedLine = {
+  readonly id: string
+  /** Signed: what it adds to the sum. An overlap line is negative. Null: unknown. */
+  readonly countedDb: number | null
+  readonly lowDb: number | null
+  readonly highDb: number | null
+}
+
+export type ShareUse = {
+  readonly id: string
+  readonly of: { readonly kind: 'assembly' | 'line' | 'discipline'; readonly ref: string }
+  readonly shareDb: number
+  readonly usedDb: number
+  readonly undecidedLines: readonly string[]
+}
+
+/** Something to know about a record: a closed list of codes (flags.ts), with what to do. */
+export type Flag = {
+  readonly code: string
+  readonly severity: 'problem' | 'warning' | 'notice'
+  readonly section: SectionName | 'head'
+  readonly id: string | null
+  readonly field: string | null
+  readonly message: string
+  readonly todo: string
+}
+
+/** Loss data of evidence files, by SHA-256, for evaluate(). Empty until networks are computed. */
+export type EvidenceData = ReadonlyMap<string, unknown>

@@ -1,0 +1,2 @@
+export { DIMENSIONS, type Dimension } from './dimensions'
+export { isQuantity, parseQuantity, type Quantity, type QuantityRefusal, withUnit } from './parse'

@@ -1,0 +1,118 @@
+import type { Identity } from '../access/identity'
+import type { Evaluation } from '../budget/evaluation'
+import type { Budget, Verdict } from '../budget/schema'
+import type { Operation } from '../sheet/change'
+import type { Acknowledged, Door, Refused, Role, TrailEntry } from '../sheet/wire'
+
+/**
+ * What lib/server publishes on globalThis for the route handlers and pages of app: Next's bundle and the server's share no
+ * modules, so this one object is the only bridge (write path, rule 9).
+ */
+export type Services = {
+  readonly publicUrl: string
+  readonly demo: boolean
+  readonly engine: string
+  readonly access: AccessService
+  readonly budgets: BudgetService
+  readonly evidence: EvidenceService
+  /** The way in for everything but a worksheet's socket: same gate, journal and fan-out. */
+  submit(budget: string, identity: Identity, door: Door, edit: SubmittedEdit): Promise<Acknowledged | Refused>
+}
+
+export type SubmittedEdit = {
+  /** Idempotency key: the same id with the same operations is answered with the same seq. */
+  readonly editId: string
+  readonly operations: readonly Operation[]
+  /** Refused with 'conflict' if the budget has moved past this seq. */
+  readonly expectedSeq?: number
+}
+
+export type AccessService = {
+  identify(headers: Headers): Promise<Identity | null>
+  /** Both return the Set-Cookie lines to send. signIn answers null for a wrong e-mail or password, 'slow' when throttled. */
+  signIn(
+    email: string,
+    password: string,
+    headers: Headers,
+  ): Promise<{ identity: Identity; cookies: string[] } | null | { slow: number }>
+  signOut(identity: Identity, headers: Headers): Promise<{ cookies: string[] }>
+  changePassword(
+    identity: Identity,
+    current: string,
+    next: string,
+    headers: Headers,
+  ): Promise<{ cookies: string[] } | null>
+  /** True until somebody has become the owner of this server. */
+  needsOwner(): Promise<boolean>
+  createOwner(code: string, person: { name: string; email: string; password: string }): Promise<Identity | null>
+  /** Returns the first password, to be handed over and changed; null where the e-mail is taken. */
+  addPerson(person: { name: string; email: string }): Promise<{ person: PersonSummary; password: string } | null>
+  people(): Promise<PersonSummary[]>
+  role(person: string, budget: string): Promise<Role | null>
+  members(budget: string): Promise<{ person: PersonSummary; role: Role }[]>
+  /** Role null removes; 'last-owner' where that would leave the budget without an owner. */
+  setMember(budget: string, person: string, role: Role | null): Promise<'done' | 'no-such-person' | 'last-owner'>
+  tokens(person: string): Promise<TokenSummary[]>
+  createToken(
+    identity: Identity,
+    name: string,
+    expiresAt: number | null,
+  ): Promise<{ token: string; summary: TokenSummary }>
+  revokeToken(person: string, id: string): Promise<boolean>
+}
+
+export type PersonSummary = { readonly id: string; readonly name: string; readonly email: string }
+export type TokenSummary = {
+  readonly id: string
+  readonly name: string
+  readonly createdAt: number
+  readonly expiresAt: number | null
+  readonly lastUsedAt: number | null
+}
+
+export type BudgetService = {
+  list(identity: Identity): Promise<BudgetSummary[]>
+  /** Makes journal entry 1, then the record; the person becomes the owner. */
+  create(identity: Identity, door: Door, budget: Budget): Promise<{ id: string }>
+  read(budget: string): Promise<{ budget: Budget; epoch: number; seq: number; head: string } | null>
+  evaluation(budget: string): Promise<{ evaluation: Evaluation; seq: number } | null>
+  /** after: oldest first, for programs; latest: newest first, for people. Null where the budget does not exist. */
+  trail(
+    budget: string,
+    range: { after: number; limit: number } | { before?: number; limit: number },
+  ): Promise<TrailEntry[] | null>
+}
+
+export type BudgetSummary = {
+  readonly id: string
+  readonly name: string
+  readonly description: string
+  readonly role: Role
+  readonly verdict: Verdict
+  /** The allowance that decides the verdict, with its words and margin. */
+  readonly evaluation: Evaluation
+  readonly seq: number
+  readonly lastChange: { readonly personName: string; readonly time: number } | null
+  /** Set where the budget cannot be served (a damaged or missing journal), with what to do. */
+  readonly locked: string | null
+}
+
+export type EvidenceService = {
+  /** Stores the bytes once by hash (write aside, sync, rename) and describes them for this budget. */
+  store(
+    budget: string,
+    identity: Identity,
+    file: { name: string; mediaType: string; bytes: AsyncIterable<Uint8Array> },
+  ): Promise<StoredEvidence>
+  list(budget: string): Promise<StoredEvidence[]>
+  open(budget: string, sha256: string): Promise<{ evidence: StoredEvidence; stream: ReadableStream<Uint8Array> } | null>
+}
+
+export type StoredEvidence = {
+  readonly sha256: string
+  readonly name: string
+  readonly mediaType: string
+  readonly size: number
+  readonly person: string
+  readonly time: number
+}
