@@ -1,0 +1,17 @@
+import { build } from 'esbuild'
+import { ROOT } from './paths.mjs'
+
+/** One bundle for the process that serves, one for the command line; packages stay where npm put them. */
+await build({
+  absWorkingDir: ROOT,
+  entryPoints: { server: 'lib/server/main.ts', halfbaud: 'lib/server/cli/entry.ts' },
+  outdir: 'dist',
+  outExtension: { '.js': '.mjs' },
+  bundle: true,
+  platform: 'node',
+  format: 'esm',
+  target: 'node20',
+  packages: 'external',
+  sourcemap: true,
+  logLevel: 'warning',
+})
