@@ -1,4 +1,4 @@
-import type { Role } from '../sheet/wire'
+export { ROLE_ORDER, roleAllows } from '../sheet/roles'
 
 /** Who is at the other end of a request or a socket. */
 export type Identity = {
@@ -13,10 +13,4 @@ export type Identity = {
   readonly via: 'cookie' | 'token'
   /** Milliseconds since 1970, or null for a token without end. */
   readonly expiresAt: number | null
-}
-
-export const ROLE_ORDER: readonly Role[] = ['viewer', 'editor', 'approver', 'owner']
-
-export function roleAllows(role: Role | null, needed: Role): boolean {
-  return role !== null && ROLE_ORDER.indexOf(role) >= ROLE_ORDER.indexOf(needed)
 }

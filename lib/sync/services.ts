@@ -1,8 +1,11 @@
 import type { Identity } from '../access/identity'
+import type { AccessService } from '../access/service'
 import type { Evaluation } from '../budget/evaluation'
 import type { Budget, Verdict } from '../budget/schema'
 import type { Operation } from '../sheet/change'
 import type { Acknowledged, Door, Refused, Role, TrailEntry } from '../sheet/wire'
+
+export type { AccessService, PersonSummary, TokenSummary } from '../access/service'
 
 /**
  * What lib/server publishes on globalThis for the route handlers and pages of app: Next's bundle and the server's share no
@@ -15,6 +18,8 @@ export type Services = {
   readonly access: AccessService
   readonly budgets: BudgetService
   readonly evidence: EvidenceService
+  /** Null where both databases answer, else what is wrong, in words that may be shown to anybody. */
+  ready(): Promise<string | null>
   /** The way in for everything but a worksheet's socket: same gate, journal and fan-out. */
   submit(budget: string, identity: Identity, door: Door, edit: SubmittedEdit): Promise<Acknowledged | Refused>
 }
@@ -25,49 +30,6 @@ export type SubmittedEdit = {
   readonly operations: readonly Operation[]
   /** Refused with 'conflict' if the budget has moved past this seq. */
   readonly expectedSeq?: number
-}
-
-export type AccessService = {
-  identify(headers: Headers): Promise<Identity | null>
-  /** Both return the Set-Cookie lines to send. signIn answers null for a wrong e-mail or password, 'slow' when throttled. */
-  signIn(
-    email: string,
-    password: string,
-    headers: Headers,
-  ): Promise<{ identity: Identity; cookies: string[] } | null | { slow: number }>
-  signOut(identity: Identity, headers: Headers): Promise<{ cookies: string[] }>
-  changePassword(
-    identity: Identity,
-    current: string,
-    next: string,
-    headers: Headers,
-  ): Promise<{ cookies: string[] } | null>
-  /** True until somebody has become the owner of this server. */
-  needsOwner(): Promise<boolean>
-  createOwner(code: string, person: { name: string; email: string; password: string }): Promise<Identity | null>
-  /** Returns the first password, to be handed over and changed; null where the e-mail is taken. */
-  addPerson(person: { name: string; email: string }): Promise<{ person: PersonSummary; password: string } | null>
-  people(): Promise<PersonSummary[]>
-  role(person: string, budget: string): Promise<Role | null>
-  members(budget: string): Promise<{ person: PersonSummary; role: Role }[]>
-  /** Role null removes; 'last-owner' where that would leave the budget without an owner. */
-  setMember(budget: string, person: string, role: Role | null): Promise<'done' | 'no-such-person' | 'last-owner'>
-  tokens(person: string): Promise<TokenSummary[]>
-  createToken(
-    identity: Identity,
-    name: string,
-    expiresAt: number | null,
-  ): Promise<{ token: string; summary: TokenSummary }>
-  revokeToken(person: string, id: string): Promise<boolean>
-}
-
-export type PersonSummary = { readonly id: string; readonly name: string; readonly email: string }
-export type TokenSummary = {
-  readonly id: string
-  readonly name: string
-  readonly createdAt: number
-  readonly expiresAt: number | null
-  readonly lastUsedAt: number | null
 }
 
 export type BudgetService = {
