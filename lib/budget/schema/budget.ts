@@ -45,8 +45,23 @@ export const LANE_KEY = new RegExp(`^(${ID.source.slice(1, -1)})/([1-9]\\d{0,2})
 const laneKey = z
   .string()
   .regex(LANE_KEY, "A lane value's key is 'line/lane/field'.")
-  .refine((key) => Number(key.split('/')[1]) <= LIMITS.lanes)
-export const laneValue = z.string().max(LIMITS.laneValueLength).nullable()
+  .refine((key) => Number(key.split('/')[1]) <= LIMITS.lanes, `A link has at most ${LIMITS.lanes} lanes.`)
+export const laneValue = z
+  .string('Write the value of the lane as text, with its unit.')
+  .max(LIMITS.laneValueLength, `Write at most ${LIMITS.laneValueLength} characters.`)
+  .nullable()
+
+/** What a lane says instead of its line obeys the bounds of the line's own field. */
+const laneValues = z
+  .record(laneKey, laneValue)
+  .default({})
+  .superRefine((values, ctx) => {
+    for (const [key, value] of Object.entries(values)) {
+      const field = LANE_FIELDS.find((name) => key.endsWith(`/${name}`))
+      const result = field && line.shape[field].safeParse(value)
+      for (const issue of result?.error?.issues ?? []) ctx.addIssue({ ...issue, path: [key] })
+    }
+  })
 
 /** The budget: the shared worksheet of one link, version 1. The budget file is this as JSON. */
 export const budgetSchema = z.strictObject({
@@ -62,7 +77,7 @@ export const budgetSchema = z.strictObject({
   evidence: section(SECTIONS.evidence),
   figures: section(SECTIONS.figures),
   signOffs: section(SECTIONS.signOffs),
-  laneValues: z.record(laneKey, laneValue).default({}),
+  laneValues,
 })
 
 export type Budget = z.output<typeof budgetSchema>

@@ -31,6 +31,25 @@ const wellFormed = (text: string) =>
 
 const optional = <T extends z.ZodType>(schema: T) => schema.nullable().default(null as never)
 
+/** One value of each dimension, for messages and for the generated JSON Schema. */
+export const SAMPLES: Readonly<Record<Dimension, string>> = {
+  length: '5 in',
+  frequency: '26.5625 GHz',
+  bitRate: '106.25 Gb/s',
+  symbolRate: '53.125 GBd',
+  time: '2 ps',
+  loss: '1.35 dB',
+  lossPerLength: '0.95 dB/in',
+  delayPerLength: '170 ps/in',
+  capacitance: '120 fF',
+  inductance: '60 pH',
+  resistance: '100 Ω',
+  temperature: '25 °C',
+  ratio: '6 %',
+  perKelvin: '0.12 %/K',
+  number: '3.6',
+}
+
 type Bounds = { min: number; max: number; unit?: string }
 
 /** A number with its unit, as typed; bounds are in SI units of the first dimension. */
@@ -39,8 +58,8 @@ export function quantity(dimensions: Dimension | readonly Dimension[], bounds: B
   const first = list[0] as Dimension
   const unit = bounds.unit ?? Object.keys(DIMENSIONS[first].units)[0] ?? ''
   const schema = z
-    .string()
-    .max(40)
+    .string(`Write the number and its unit as text, such as "${SAMPLES[first]}".`)
+    .max(40, 'Write the number and its unit in at most 40 characters.')
     .check((ctx) => {
       const result = parseQuantity(ctx.value, list)
       const issue = isQuantity(result) ? outOfBounds(result.value, result.dimension, list, bounds) : result.reason
@@ -70,26 +89,30 @@ function outOfBounds(value: number, dimension: Dimension, list: readonly Dimensi
 
 const readable = (value: number) => String(Number(value.toPrecision(6)))
 
+function plainText(maxLength: number) {
+  return z
+    .string('Write text between quotation marks.')
+    .max(maxLength, `Write at most ${maxLength} characters.`)
+    .refine(wellFormed, 'The text has half of a character pair in it; type it again.')
+}
+
 export function text(maxLength: number, what: string) {
-  return described(
-    optional(z.string().max(maxLength).refine(wellFormed, 'The text has half of a character pair in it.')),
-    {
-      kind: 'text',
-      maxLength,
-      what,
-    },
-  )
+  return described(optional(plainText(maxLength)), {
+    kind: 'text',
+    maxLength,
+    what,
+  })
 }
 
 export function choice<const T extends readonly [string, ...string[]]>(choices: T, what: string) {
-  return described(optional(z.enum(choices)), { kind: 'choice', choices, what })
+  return described(optional(z.enum(choices, `Write one of: ${choices.join(', ')}.`)), { kind: 'choice', choices, what })
 }
 
 /** Several of a closed list, kept as one string: the codes in list order, separated by one space; '' is 'none of them'. */
 export function setOf(choices: readonly string[], what: string) {
   const schema = z
-    .string()
-    .max(400)
+    .string('Write the codes as one text, with a space between.')
+    .max(400, 'Write each code once.')
     .refine(
       (value) => value === sortedSet(value.split(' ').filter(Boolean), choices),
       `List the codes in this order, one space between: ${choices.join(' ')}.`,
@@ -102,41 +125,45 @@ export function sortedSet(codes: readonly string[], choices: readonly string[]):
 }
 
 export function flag(what: string) {
-  return described(optional(z.boolean()), { kind: 'flag', what })
+  return described(optional(z.boolean('Write true or false.')), { kind: 'flag', what })
 }
 
 /** 'removed' is a field like any other; nothing is ever deleted from a budget. */
-export const removed = described(z.boolean().default(false), {
+export const removed = described(z.boolean('Write true or false.').default(false), {
   kind: 'flag',
   what: 'Taken out of the budget; kept for the trail.',
 })
 
 export function integer(min: number, max: number, what: string) {
-  return described(optional(z.number().int().min(min).max(max)), { kind: 'integer', min, max, what })
+  const asked = `Write a whole number from ${min} to ${max}, without quotation marks.`
+  return described(optional(z.number(asked).int(asked).min(min, asked).max(max, asked)), {
+    kind: 'integer',
+    min,
+    max,
+    what,
+  })
 }
 
 export const ID = /^[a-z0-9][a-z0-9-]{0,39}$/
 export const identifier = z.string().regex(ID, 'An id has 1 to 40 small letters, digits and hyphens.')
 
 export function reference(section: string, what: string) {
-  return described(optional(z.string().regex(ID, `Name an id of '${section}'.`)), { kind: 'reference', section, what })
+  const asked = `Name an id of '${section}'.`
+  return described(optional(z.string(asked).regex(ID, asked)), { kind: 'reference', section, what })
 }
 
 /** A position between two others: a fractional index, so that two people can insert at once. Ties are broken by id. */
 export const order = described(
   z
-    .string()
-    .max(128)
+    .string("Write a key for the position, such as 'a0'.")
+    .max(128, 'Write at most 128 characters.')
     .regex(/^[A-Za-z][0-9A-Za-z]+$/, "An order key starts with a letter, such as 'a0'."),
   { kind: 'order', what: 'Position in the channel, as a fractional index.' },
 )
 
 /** Plain text that several people may type in at once. */
-export const note = described(
-  z.string().max(4000).refine(wellFormed, 'The text has half of a character pair in it.').default(''),
-  {
-    kind: 'note',
-    maxLength: 4000,
-    what: 'Free text.',
-  },
-)
+export const note = described(plainText(4000).default(''), {
+  kind: 'note',
+  maxLength: 4000,
+  what: 'Free text.',
+})
