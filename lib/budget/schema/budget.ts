@@ -55,6 +55,7 @@ export const laneValue = z
 const laneValues = z
   .record(laneKey, laneValue)
   .default({})
+  .refine((values) => Object.keys(values).length <= LIMITS.laneValues, `At most ${LIMITS.laneValues} lane values.`)
   .superRefine((values, ctx) => {
     for (const [key, value] of Object.entries(values)) {
       const field = LANE_FIELDS.find((name) => key.endsWith(`/${name}`))

@@ -1,5 +1,5 @@
 export * from './budget'
 export { head, SCHEMA_VERSION } from './head'
 export { LANE_FIELDS } from './lines'
-export { type FieldMeta, fieldMeta, ID, sortedSet } from './scalars'
+export { type FieldMeta, fieldMeta, ID, SAMPLES, sortedSet } from './scalars'
 export * from './words'
