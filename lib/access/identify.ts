@@ -53,7 +53,7 @@ export function createIdentifier(
     holdSession: (secret) =>
       hold(async () => fromSession(await (await accounts.$context).internalAdapter.findSession(secret))),
     async identify(headers) {
-      const bearer = /^Bearer +(.*)$/i.exec(headers.get('authorization') ?? '')
+      const bearer = /^Bearer(?: +(.*))?$/i.exec(headers.get('authorization') ?? '')
       if (bearer) return holdToken((bearer[1] ?? '').trim())
       if (!headers.has('cookie')) return null
       return hold(async () => fromSession(await accounts.api.getSession({ headers: cookieOnly(headers) })))
