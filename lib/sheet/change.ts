@@ -9,7 +9,8 @@ export type Place =
 
 /**
  * One row of what an edit did, as the trail keeps it.
- * set: a field went from before to after. add: a record was made. text: a note was typed in (before and after whole).
+ * set: a field went from before to after. add: a record was made with this field (one row for each field that is not
+ * empty; before is null). text: a note was typed in (before and after whole).
  * overtaken: a write arrived that does not show, because another one won; after is the value kept, written is what was sent.
  */
 export type Change = Place & {
@@ -43,6 +44,8 @@ export type Operation =
       readonly id: string
       readonly field: 'note'
       readonly text: string
+      /** The text that the typing began with; what others typed meanwhile then stays. Without it, `text` is the whole note. */
+      readonly base?: string
     }
   | {
       readonly op: 'lane'

@@ -44,6 +44,7 @@ export function refuseValue(
   field: string,
   value: unknown,
 ): string | null {
+  if (Object.is(value, -0)) return 'Write zero without a minus sign.'
   if (section === 'laneValues') {
     if (!LANE_KEY.test(field) || Number(field.split('/')[1]) > LIMITS.lanes)
       return "A lane value's key is 'line/lane/field'."
