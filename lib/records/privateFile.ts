@@ -1,19 +1,23 @@
-import { open } from 'node:fs/promises'
+import { chmod, open } from 'node:fs/promises'
 import { dirname } from 'node:path'
 
 /**
- * Makes an empty file that only its owner may read, if it is not there, and syncs its directory. SQLite gives its -wal and
- * -shm files the same mode. An existing file is set to the same mode.
+ * Makes an empty file that only its owner may read, or sets an existing one to that mode. SQLite gives its -wal and -shm
+ * files the same mode. An existing file is not opened: closing it would drop the locks that this process holds on it.
  */
 export async function makePrivateFile(file: string): Promise<void> {
-  const handle = await open(file, 'a', 0o600)
   try {
-    await handle.chmod(0o600)
-    await handle.sync()
-  } finally {
-    await handle.close()
+    const handle = await open(file, 'wx', 0o600)
+    try {
+      await handle.sync()
+    } finally {
+      await handle.close()
+    }
+    await syncDirectory(dirname(file))
+  } catch (error) {
+    if ((error as NodeJS.ErrnoException).code !== 'EEXIST') throw error
+    await chmod(file, 0o600)
   }
-  await syncDirectory(dirname(file))
 }
 
 /** Makes renames and new names in the directory last through a power cut. */

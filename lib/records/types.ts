@@ -6,8 +6,13 @@ export type Store = {
   readonly records: Records
   readonly journal: Journal
   readonly evidence: EvidenceFiles
+  /** Budgets whose record and journal do not agree: lock them and raise the alarm (write path, rule 7). */
+  readonly problems: readonly StoreProblem[]
   close(): Promise<void>
 }
+
+/** `what` says what is wrong and what to do. */
+export type StoreProblem = { readonly budget: string; readonly what: string }
 
 /** The records file. Plain values in and out; no driver type leaves lib/records. */
 export type Records = {
@@ -52,6 +57,7 @@ export type BudgetRecords = {
   create(record: BudgetRecord, owner: string): Promise<void>
   byId(id: string): Promise<BudgetRecord | null>
   all(): Promise<BudgetRecord[]>
+  /** The budgets that stand ('made') and that the person is a member of, oldest first. */
   forPerson(person: string): Promise<{ record: BudgetRecord; role: Role }[]>
   rename(id: string, name: string): Promise<void>
 }

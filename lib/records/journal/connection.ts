@@ -39,7 +39,8 @@ async function requireSynced(connection: Connection): Promise<void> {
     )
 }
 
-function openFile(file: string, flags: number): Promise<Connection> {
+/** A bare connection, with the driver's own settings. */
+export function openFile(file: string, flags: number): Promise<Connection> {
   return new Promise((resolve, reject) => {
     const database: sqlite3.Database = new sqlite3.Database(file, flags, (error) => {
       if (error) reject(error)

@@ -79,6 +79,16 @@ export function journalOver(writing: Connection, reading: Connection): Journal {
       return found ? toEntry(found) : null
     },
 
+    async findEditStarting(budget, prefix) {
+      // U+10FFFF sorts after every character that an id may have.
+      const [found] = await reading.all<StoredEntry>(
+        `SELECT ${ENTRY} FROM entries WHERE budget = ? AND editId >= ? AND editId < ? AND kind IN ('edit', 'seed')
+         ORDER BY editId LIMIT 1`,
+        [budget, prefix, `${prefix}\u{10FFFF}`],
+      )
+      return found ? toEntry(found) : null
+    },
+
     async bindings(budget) {
       const found = await reading.all<{ clientId: number; person: string }>(
         `SELECT clientId, person FROM entries WHERE budget = ? AND kind = 'bind' ORDER BY seq DESC`,

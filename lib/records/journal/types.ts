@@ -47,6 +47,8 @@ export interface Journal {
   /** Rows with their updates, seq > after, in order. */
   rows(budget: string, after: number): Promise<Row[]>
   findEdit(budget: string, editId: string): Promise<Entry | null>
+  /** The first edit whose id begins with this; edits by submit() are kept as 'id:hash of the operations'. */
+  findEditStarting(budget: string, prefix: string): Promise<Entry | null>
   /** Client id → person, from the 'bind' rows. */
   bindings(budget: string): Promise<Map<number, string>>
   budgets(): Promise<string[]>
