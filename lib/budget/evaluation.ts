@@ -1,4 +1,5 @@
-import type { Basis, Grade, Owner, SectionName, Statistic, Verdict } from './schema'
+import type { FlagDraft, Severity } from './flags'
+import type { Basis, Grade, Owner, Statistic, Verdict } from './schema'
 
 /** What evaluate() returns. Losses are positive decibels; null means unknown, never zero. */
 export type Evaluation = {
@@ -26,7 +27,10 @@ export type SignallingEvaluation = {
 /** One line, at the Nyquist frequency of the budget and beside each allowance's sum. */
 export type LineEvaluation = {
   readonly id: string
+  /** In the lane where this line is worst, in the reference corner. */
   readonly loss: LossAt
+  /** The lane where this line is worst; null: a lane without a value of its own. */
+  readonly lane: number | null
   readonly owner: Owner | null
   readonly basis: Basis | null
   readonly grade: Grade
@@ -52,8 +56,10 @@ export type AllowanceEvaluation = {
   readonly atHz: number | null
   readonly requiredMarginDb: number
   readonly judged: {
+    /** Id of the corner, or 'reference corner'. */
     readonly corner: string
     readonly statistic: Statistic
+    /** The lane that the figures are of: the worst, unless the allowance names one; null where all lanes are alike. */
     readonly lane: number | null
     readonly lanes: number
   }
@@ -64,7 +70,7 @@ export type AllowanceEvaluation = {
   /** Planes found in the budget, in channel order, or null. */
   readonly from: string | null
   readonly to: string | null
-  /** Sum of the lines that have a number, in the judged conditions; overlap lines subtract. */
+  /** Sum of the lines that have a number, in the judged conditions; overlap lines subtract. 0 where a plane is missing. */
   readonly knownDb: number
   /** The whole loss in the judged conditions; null while a line between the planes has no number. */
   readonly lossDb: number | null
@@ -95,19 +101,13 @@ export type ShareUse = {
   readonly of: { readonly kind: 'assembly' | 'line' | 'discipline'; readonly ref: string }
   readonly shareDb: number
   readonly usedDb: number
+  /** What is left of it; negative: past the share. */
+  readonly freeDb: number
   readonly undecidedLines: readonly string[]
 }
 
 /** Something to know about a record: a closed list of codes (flags.ts), with what to do. */
-export type Flag = {
-  readonly code: string
-  readonly severity: 'problem' | 'warning' | 'notice'
-  readonly section: SectionName | 'head'
-  readonly id: string | null
-  readonly field: string | null
-  readonly message: string
-  readonly todo: string
-}
+export type Flag = FlagDraft & { readonly severity: Severity }
 
 /** Loss data of evidence files, by SHA-256, for evaluate(). Empty until networks are computed. */
 export type EvidenceData = ReadonlyMap<string, unknown>

@@ -1,0 +1,44 @@
+import { parsePoints } from '../../channel/tables'
+import type { Findings } from '../findings'
+import { FREQUENCY, LENGTH, LOSS_PER_LENGTH, NUMBER } from '../quantities'
+import { atFrequency } from './atFrequency'
+import type { Model, ModelInput } from './model'
+import { fromPoints } from './table'
+
+/** Length times a loss class of the line's assembly. */
+export const lossClass: Model = (input) => {
+  const { fields, classFields } = input
+  const length = fields.need('length', LENGTH)
+  if (classFields === null) {
+    const taken = input.line.lossClass !== null
+    return fields.say(
+      'class-missing',
+      'lossClass',
+      `${fields.name}: ${taken ? 'its loss class does not exist or was taken out' : 'no loss class is chosen'}.`,
+      'Choose a loss class of its assembly, or state the loss itself.',
+    )
+  }
+  const scale = classFields.may('scale', NUMBER)
+  if (length === null || scale === 'unreadable') return null
+  return attenuation(input, classFields, length * (scale ?? 1))
+}
+
+/** dB over so many metres of the class. */
+function attenuation(input: ModelInput, fields: Findings<'lossClasses'>, length: number) {
+  const { points: text } = fields.record
+  if (text === null || text.trim() === '') {
+    const perLength = fields.need('lossPerLength', LOSS_PER_LENGTH)
+    const at = fields.need('at', FREQUENCY)
+    return perLength === null || at === null ? null : atFrequency(input, fields, perLength * length, at)
+  }
+  const parsed = parsePoints(text, 'lossPerLength')
+  if ('reason' in parsed) {
+    return fields.say('unreadable-value', 'points', `${fields.name}: the points cannot be read.`, parsed.reason)
+  }
+  const perLength = fields.may('lossPerLength', LOSS_PER_LENGTH)
+  const at = fields.may('at', FREQUENCY)
+  if (perLength === 'unreadable' || at === 'unreadable') return null
+  const further = perLength !== null && at !== null ? [{ hz: at, value: perLength }] : []
+  const points = [...parsed.points.filter((point) => point.hz !== at), ...further].sort((a, b) => a.hz - b.hz)
+  return fromPoints(input, fields, points, length)
+}

@@ -1,0 +1,30 @@
+import type { LossAt } from '../evaluation'
+import type { Findings } from '../findings'
+import type { Line, LossClass } from '../schema'
+
+/** What a model may know. */
+export type ModelInput = {
+  /** The line, with the values of one lane. */
+  readonly line: Line
+  readonly fields: Findings<'lines'>
+  /** The loss class that the line names, and its fields; null where it names none that exists. */
+  readonly lossClass: LossClass | null
+  readonly classFields: Findings<'lossClasses'> | null
+  /** Hz that the loss is asked at. */
+  readonly hz: number
+  /** Ω, differential; null where the budget does not say it. */
+  readonly reference: number | null
+  /** Continues 'this is …' where a frequency is a well-known mistake for the Nyquist frequency, else null. */
+  readonly mistake: (hz: number) => string | null
+}
+
+/** The loss of one line at one frequency, before skew, corner and tolerance. */
+export type ModelLoss = {
+  readonly db: number
+  readonly by: NonNullable<LossAt['by']>
+  /** dB to each side that moving in frequency added; adds to the tolerance. */
+  readonly spreadDb: number
+}
+
+/** Finds the loss, or writes down in the findings why there is none and answers null. */
+export type Model = (input: ModelInput) => ModelLoss | null

@@ -1,0 +1,2 @@
+export { groupedRootSumSquare } from './grouped'
+export { extremeOf, type Meaning, sigmaOf } from './tolerance'
