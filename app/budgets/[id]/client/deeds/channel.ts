@@ -1,46 +1,46 @@
-import { generateKeyBetween } from 'fractional-indexing'
 import type { Budget, Scalar } from '../../../../../lib/budget/schema'
 import type { Operation } from '../../../../../lib/sheet/change'
-import { type ChannelRow, channelRows, newId, setField } from './place'
+import { newId } from '../../../../../lib/sheet/ids'
+import { orderForInsert, type Row, rowsInOrder } from '../../../../../lib/sheet/order'
+import { setField } from './records'
 
 /** What people do with the rows of the channel, as operations on the sheet. */
 
 export type NewRow = { readonly section: 'lines' | 'planes'; readonly values: Readonly<Record<string, Scalar>> }
 
-/** Adds a row below another, or at the end. @returns the operation and the new record's id, to put the focus there. */
-export function addRow(budget: Budget, below: string | null, row: NewRow): { operations: Operation[]; id: string } {
-  const id = newId(row.section === 'lines' ? 'line' : 'plane')
-  const values = { ...row.values, order: orderBelow(channelRows(budget), below) }
-  return { operations: [{ op: 'add', section: row.section, id, values }], id }
+/** Rows that are in the budget, in channel order. `keep`: rows that stay although removed, since somebody types in them. */
+export function shownRows(budget: Budget, keep: (row: Row) => boolean = () => false): readonly Row[] {
+  return rowsInOrder(budget).filter((row) => !budget[row.section][row.id]?.removed || keep(row))
 }
 
-/** Moves a row by one place; nothing at the ends. Only the moved row is written, so two people can move at once. */
-export function moveRow(budget: Budget, id: string, by: -1 | 1): Operation[] {
-  const rows = channelRows(budget)
+/** Adds a row below another, or at the end. @returns the operations and the new record's id, to put the focus there. */
+export function addRow(
+  budget: Budget,
+  below: string | null,
+  row: NewRow,
+): { readonly operations: readonly Operation[]; readonly id: string } {
+  const id = newId()
+  const after = below ?? rowsInOrder(budget).at(-1)?.id ?? null
+  const { order, shifts } = orderForInsert(budget, after)
+  return { operations: [{ op: 'add', section: row.section, id, values: { ...row.values, order } }, ...shifts], id }
+}
+
+/** Moves a row past its shown neighbour; nothing at the ends. Only the moved row is written where its keys allow it. */
+export function moveRow(budget: Budget, id: string, by: -1 | 1): readonly Operation[] {
+  const rows = shownRows(budget)
   const from = rows.findIndex((row) => row.id === id)
   const row = rows[from]
-  const to = from + by
-  if (!row || to < 0 || to >= rows.length) return []
-  return [setField(sectionOf(row), id, 'order', orderAfter(rows, by < 0 ? to - 1 : to))]
+  const neighbour = rows[from + by]
+  if (!row || !neighbour) return []
+  const after = by > 0 ? neighbour.id : (rows[from - 2]?.id ?? null)
+  const { order, shifts } = orderForInsert(budget, after, id)
+  return [setField(row.section, id, 'order', order), ...shifts]
 }
 
-export function removeRow(row: Pick<ChannelRow, 'kind' | 'id'>): Operation[] {
-  return [setField(sectionOf(row), row.id, 'removed', true)]
+export function removeRow(row: Pick<Row, 'section' | 'id'>): readonly Operation[] {
+  return [setField(row.section, row.id, 'removed', true)]
 }
 
-export const sectionOf = (row: Pick<ChannelRow, 'kind'>) => (row.kind === 'line' ? 'lines' : 'planes')
-
-function orderBelow(rows: readonly ChannelRow[], below: string | null): string {
-  const at = below === null ? rows.length - 1 : rows.findIndex((row) => row.id === below)
-  return orderAfter(rows, at)
-}
-
-/**
- * A key that comes after rows[at] (-1: before all). Two rows made at the same moment may carry one key and be told apart by
- * id only; no key lies between them, so the new row goes below all of them.
- */
-function orderAfter(rows: readonly ChannelRow[], at: number): string {
-  const low = rows[at]?.order ?? null
-  const high = rows.slice(at + 1).find((row) => low === null || row.order > low)?.order ?? null
-  return generateKeyBetween(low, high)
+export function restoreRow(row: Pick<Row, 'section' | 'id'>): readonly Operation[] {
+  return [setField(row.section, row.id, 'removed', false)]
 }

@@ -1,0 +1,49 @@
+'use client'
+import { type KeyboardEvent, type ReactNode, useContext } from 'react'
+import { Standing, standingColour } from '../slips/Aside'
+import slips from '../slips/slips.module.css'
+import { OthersContext, type Selected, useBench, useView } from '../state/contexts'
+import { RowHeader } from './parts'
+import css from './rows.module.css'
+import { useCurrent } from './useCurrent'
+
+type Props = Selected & {
+  readonly label: string
+  readonly children: ReactNode
+  readonly onRemove: () => void
+}
+
+/** The head of a row: selects it, opens its detail, and removes it on Delete. */
+export function RowHead({ section, id, label, children, onRemove }: Props) {
+  const { canWrite } = useBench()
+  const { openDetail, select } = useView()
+  const key = rowKey({ section, id })
+  const others = useContext(OthersContext).get(key) ?? []
+  const onKeyDown = (event: KeyboardEvent) => {
+    if (event.key === 'Delete' && canWrite) onRemove()
+    else if (event.key === 'Enter' || event.key === ' ') openDetail(true)
+    else return
+    event.preventDefault()
+  }
+  return (
+    <RowHeader
+      tabIndex={useCurrent(key) ? 0 : -1}
+      className={`${css.cell} ${css.head} ${slips.standing}`}
+      data-target=""
+      data-place={key}
+      data-standing={standingColour(others)}
+      onKeyDown={onKeyDown}
+      onClick={() => {
+        select({ section, id })
+        openDetail(true)
+      }}
+    >
+      <span className={css.unseen}>{label}</span>
+      <span aria-hidden="true">{children}</span>
+      <Standing others={others} />
+    </RowHeader>
+  )
+}
+
+/** The place of a row as a whole: a record without a field. */
+export const rowKey = ({ section, id }: Selected) => `${section}/${id}/`

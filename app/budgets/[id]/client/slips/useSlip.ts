@@ -1,0 +1,67 @@
+'use client'
+import { useCallback, useContext, useSyncExternalStore } from 'react'
+import { placeKey } from '../../../../../lib/sheet/place'
+import type { Present } from '../../../../../lib/sheet/wire'
+import { OthersContext, UnsavedContext, useBench } from '../state/contexts'
+import type { Draft } from '../state/drafts'
+import type { SlipSpec } from './spec'
+
+export type Slip = {
+  readonly draft: Draft | null
+  /** What stands in the slip: what is being typed, else what the sheet says. */
+  readonly text: string
+  /** Another person has changed the value since the typing began: what it is now. */
+  readonly meanwhile: string | null
+  readonly unsaved: boolean
+  readonly others: readonly Present[]
+  readonly canWrite: boolean
+  readonly type: (text: string) => void
+  /** Takes what is typed. @returns false where it was not taken; it stays in the slip with its reason. */
+  readonly commit: () => boolean
+  /** Gives what is typed up. */
+  readonly restore: () => void
+}
+
+const NOBODY: readonly Present[] = []
+
+/** One slip's life: typing, taking, refusing. Nothing is sent before it is taken. */
+export function useSlip(spec: SlipSpec): Slip {
+  const bench = useBench()
+  const { drafts } = bench
+  const subscribe = useCallback((heard: () => void) => drafts.subscribe(spec.key, heard), [drafts, spec.key])
+  const draft = useSyncExternalStore(
+    subscribe,
+    () => drafts.get(spec.key),
+    () => null,
+  )
+  const unsavedPlaces = useContext(UnsavedContext)
+  const standing = useContext(OthersContext)
+  const keys = spec.places.map(placeKey)
+  const others = keys.flatMap((key) => standing.get(key) ?? NOBODY)
+
+  const restore = () => drafts.set(spec.key, null)
+  return {
+    draft,
+    text: draft?.text ?? spec.text,
+    meanwhile: draft && draft.base !== spec.text && draft.text !== spec.text ? spec.text : null,
+    unsaved: keys.some((key) => unsavedPlaces.has(key)),
+    others,
+    canWrite: bench.canWrite,
+    type: (text) => drafts.set(spec.key, { text, base: draft?.base ?? spec.text, reason: null }),
+    restore,
+    commit: () => {
+      const typed = drafts.get(spec.key)
+      if (!typed) return true
+      // What was opened and left as it was is no edit, even where another person has changed the value meanwhile.
+      const untouched = typed.text === typed.base || typed.text === spec.text
+      const outcome = untouched ? [] : spec.judge(typed.text, bench.read(), typed.base)
+      const reason = 'reason' in outcome ? outcome.reason : outcome.length > 0 ? bench.edit(outcome) : null
+      if (reason !== null) {
+        drafts.set(spec.key, { ...typed, reason })
+        return false
+      }
+      restore()
+      return true
+    },
+  }
+}
