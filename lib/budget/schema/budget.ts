@@ -31,14 +31,31 @@ export const SECTIONS = {
 } as const
 export type SectionName = keyof typeof SECTIONS
 
+/** zod skips this name without a word; what stands under it would be lost. */
+function refuseProto<T>(records: T, ctx: z.core.$RefinementCtx): T {
+  if (typeof records === 'object' && records !== null && Object.hasOwn(records, '__proto__')) {
+    ctx.addIssue({ code: 'custom', message: "'__proto__' cannot be an id; choose another." })
+  }
+  return records
+}
+
+/** A refused key says what is wrong with it, not only that something is. */
+const keyRefusal: z.core.$ZodRecordParams = {
+  error: (issue) => (issue.code === 'invalid_key' ? issue.issues[0]?.message : undefined),
+}
+
 const section = <T extends z.ZodType>(record: T) =>
   z
-    .record(identifier, record)
-    .default({})
-    .refine(
-      (records) => Object.keys(records).length <= LIMITS.recordsPerSection,
-      `At most ${LIMITS.recordsPerSection} records.`,
+    .preprocess(
+      refuseProto<Record<string, z.input<T>>>,
+      z
+        .record(identifier, record, keyRefusal)
+        .refine(
+          (records) => Object.keys(records).length <= LIMITS.recordsPerSection,
+          `At most ${LIMITS.recordsPerSection} records.`,
+        ),
     )
+    .default({})
 
 /** 'line id/lane number/field' → the value of that lane, as typed, or null for the line's own. */
 export const LANE_KEY = new RegExp(`^(${ID.source.slice(1, -1)})/([1-9]\\d{0,2})/(${LANE_FIELDS.join('|')})$`)
@@ -53,16 +70,20 @@ export const laneValue = z
 
 /** What a lane says instead of its line obeys the bounds of the line's own field. */
 const laneValues = z
-  .record(laneKey, laneValue)
+  .preprocess(
+    refuseProto<Record<string, string | null>>,
+    z
+      .record(laneKey, laneValue, keyRefusal)
+      .refine((values) => Object.keys(values).length <= LIMITS.laneValues, `At most ${LIMITS.laneValues} lane values.`)
+      .superRefine((values, ctx) => {
+        for (const [key, value] of Object.entries(values)) {
+          const field = LANE_FIELDS.find((name) => key.endsWith(`/${name}`))
+          const result = field && line.shape[field].safeParse(value)
+          for (const issue of result?.error?.issues ?? []) ctx.addIssue({ ...issue, path: [key] })
+        }
+      }),
+  )
   .default({})
-  .refine((values) => Object.keys(values).length <= LIMITS.laneValues, `At most ${LIMITS.laneValues} lane values.`)
-  .superRefine((values, ctx) => {
-    for (const [key, value] of Object.entries(values)) {
-      const field = LANE_FIELDS.find((name) => key.endsWith(`/${name}`))
-      const result = field && line.shape[field].safeParse(value)
-      for (const issue of result?.error?.issues ?? []) ctx.addIssue({ ...issue, path: [key] })
-    }
-  })
 
 /** The budget: the shared worksheet of one link, version 1. The budget file is this as JSON. */
 export const budgetSchema = z.strictObject({
