@@ -1,0 +1,13 @@
+import { benchEvaluate } from './evaluate.bench'
+import { benchWritePath } from './writePath.bench'
+
+/** One run, one table: each figure beside its baseline, measured in this same process. Nothing is asserted. */
+const rows = [...(await benchEvaluate()), ...(await benchWritePath())]
+const width = Math.max(...rows.map((row) => row.what.length))
+for (const { what, ours, baseline, unit } of rows) {
+  const ratio = (ours / baseline).toFixed(2)
+  console.log(
+    `${what.padEnd(width)}  ${ours.toFixed(3)} ${unit}, baseline ${baseline.toFixed(3)} ${unit}, ratio ${ratio}`,
+  )
+}
+process.exit(0)
