@@ -39,6 +39,6 @@ export function evaluate(budget: Budget, _evidence: EvidenceData): Evaluation {
     lines: lines.evaluations,
     allowances,
     verdict: worstVerdict(allowances.map(({ verdict }) => verdict)),
-    flags: flagsOf(context, judged, lines.drafts),
+    flags: flagsOf({ context, judged, lines: lines.evaluations }, lines.drafts),
   }
 }

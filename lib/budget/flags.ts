@@ -74,5 +74,6 @@ export type FlagDraft = {
 }
 
 export function flagOf(draft: FlagDraft): FlagDraft & { readonly severity: Severity } {
-  return { ...draft, severity: FLAGS[draft.code][0] }
+  const message = draft.message.charAt(0).toUpperCase() + draft.message.slice(1)
+  return { ...draft, message, severity: FLAGS[draft.code][0] }
 }

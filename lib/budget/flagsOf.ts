@@ -1,17 +1,18 @@
-import type { Judged } from './allowance/judge'
-import type { Context } from './context'
+import { CHECKS, type Checked } from './checks'
 import type { Flag } from './evaluation'
 import { FLAGS, type FlagDraft, flagOf } from './flags'
 
 const SEVERITIES = ['problem', 'warning', 'notice'] as const
 
 /** All flags of an evaluation, each said once, problems first. */
-export function flagsOf(context: Context, judged: readonly Judged[], lineDrafts: readonly FlagDraft[]): Flag[] {
+export function flagsOf(checked: Checked, lineDrafts: readonly FlagDraft[]): Flag[] {
+  const { context, judged } = checked
   const drafts = [
     ...context.signalling.drafts,
     ...lineDrafts,
     ...judged.flatMap(({ lanes }) => lanes.flatMap(({ lines }) => lines.flatMap(({ loss }) => loss.drafts))),
     ...context.lanes.drafts,
+    ...CHECKS.flatMap((check) => [...check(checked)]),
   ]
   const once = new Map<string, FlagDraft>()
   for (const draft of drafts) {

@@ -1,0 +1,123 @@
+import { holdsAt } from '../../channel/lines'
+import { formatScaled } from '../../channel/units'
+import type { Judged } from '../allowance/judge'
+import type { FlagDraft } from '../flags'
+import { nameOf } from '../record'
+import type { Check } from './check'
+
+/** What keeps an allowance from being judged, and what is judged away from the Nyquist frequency. */
+export const allowances: Check = function* ({ context, judged }) {
+  if (judged.length === 0) {
+    yield {
+      code: 'no-allowance',
+      section: 'head',
+      id: null,
+      field: null,
+      message: 'The link has no allowance, so there is nothing to judge its loss against.',
+      todo: 'Add an allowance: a limit between two planes, with its source.',
+    }
+  }
+  for (const one of judged) {
+    yield* undecidable(one)
+    yield* frequency(one, context.signalling.evaluation.nyquist, context.signalling.mistake)
+    yield* beside(one)
+  }
+}
+
+function* undecidable(one: Judged): Generator<FlagDraft> {
+  const { span, conditions, evaluation, lane } = one
+  if (evaluation.limitDb === null) {
+    yield flag(one, 'limit-missing', 'limit', 'has no limit.', 'Type the loss allowed in dB.')
+  }
+  for (const { code, field, reason, todo } of span.problems)
+    yield flag(one, code, field, `cannot be judged: ${reason}.`, todo)
+  if (conditions.problem !== null && conditions.problemField === 'judgedLane') {
+    yield flag(
+      one,
+      'judged-lane-missing',
+      'judgedLane',
+      `cannot be judged: ${conditions.problem}.`,
+      'Choose a lane of the link, or leave it empty for the worst.',
+    )
+    return
+  }
+  const corner = conditions.problem ?? lane.cornerUnknown
+  if (corner !== null) {
+    yield flag(
+      one,
+      'corner-not-judged',
+      'judgedCorner',
+      `cannot be judged in its corner; the decibels shown are those of the reference corner. ${corner}`,
+      'Complete the corner, or judge in the reference corner.',
+    )
+  }
+}
+
+function* frequency(one: Judged, nyquist: number | null, mistake: (hz: number) => string | null): Generator<FlagDraft> {
+  const { allowance, evaluation } = one
+  const { atHz } = evaluation
+  if (allowance.at === null) {
+    const taken = atHz === null ? '' : `; the Nyquist frequency of ${formatScaled(atHz, 'frequency')} is taken`
+    yield flag(
+      one,
+      'allowance-frequency-missing',
+      'at',
+      `does not say its frequency${taken}.`,
+      'Type the frequency that its source states it at.',
+    )
+    return
+  }
+  if (atHz === null || nyquist === null || holdsAt(nyquist, atHz)) return
+  const [at, budget] = [formatScaled(atHz, 'frequency'), formatScaled(nyquist, 'frequency')]
+  yield flag(
+    one,
+    'allowance-at-other-frequency',
+    'at',
+    `is judged at its own ${at}; the Nyquist frequency of the link is ${budget}.`,
+    'Check that the limit belongs to this link and its rate.',
+  )
+  const what = mistake(atHz)
+  if (what !== null) {
+    yield flag(
+      one,
+      'usual-wrong-frequency',
+      'at',
+      `stands at ${at}: this is ${what}.`,
+      'Look the frequency up in the source, and correct it if it was mistaken.',
+    )
+  }
+}
+
+function* beside(one: Judged): Generator<FlagDraft> {
+  const { allowance } = one
+  if ((allowance.curve?.trim() ?? '') !== '') {
+    yield flag(
+      one,
+      'curve-not-judged',
+      'curve',
+      'has a limit curve, which this version does not judge.',
+      'Hold the loss over frequency against the curve by hand.',
+    )
+  }
+  if (allowance.returnLossFloor !== null) {
+    yield flag(
+      one,
+      'floor-not-judged',
+      'returnLossFloor',
+      'asks for a return loss, which this version does not judge.',
+      'Hold the return loss against it by hand.',
+    )
+  }
+}
+
+function flag(one: Judged, code: FlagDraft['code'], field: string, message: string, todo: string): FlagDraft {
+  const { id } = one.evaluation
+  return {
+    code,
+    section: 'allowances',
+    id,
+    field,
+    message: `${nameOf('allowances', id, one.allowance)} ${message}`,
+    todo,
+  }
+}

@@ -1,0 +1,116 @@
+import type { FlagDraft } from '../flags'
+import { basisOf, gradeOf, groupOffWithoutNote, type LineItem } from '../lineItem'
+import { livingRecord, nameOf } from '../record'
+import { type Budget, COVERS } from '../schema'
+import { spreadOf, toleranceOf } from '../tolerance'
+import type { Check } from './check'
+
+/** A typical value below this many decibels is too small to matter. */
+const TYPICAL_MATTERS_DB = 0.5
+
+/** What lines claim about their numbers, and what does not go together. */
+export const claims: Check = function* ({ context, lines }) {
+  for (const item of context.items) {
+    yield* grades(item, lines[item.id]?.loss.nominalDb ?? null)
+    yield* groups(item)
+    yield* coverCodes(item)
+    yield* fixtures(context.budget, item)
+  }
+}
+
+function* grades(item: LineItem, nominal: number | null): Generator<FlagDraft> {
+  const grade = gradeOf(item)
+  const tolerance = toleranceOf(item.line, item.lossClass)
+  const spread = spreadOf(tolerance, nominal ?? 1, 0)
+  const raised = typeof spread !== 'string' && spread.highExtreme > 0
+  if (grade === 'maximum' && raised) {
+    yield flag(
+      item,
+      'maximum-with-tolerance',
+      'tolerancePlus',
+      'is a guaranteed maximum and has a tolerance on top.',
+      'Set the tolerance upwards to 0 dB, or say that the number is nominal.',
+    )
+  }
+  if (item.line.processIncluded && raised) {
+    yield flag(
+      item,
+      'process-with-tolerance',
+      'processIncluded',
+      'already contains the spread of fabrication and has a tolerance on top.',
+      'Keep one of the two.',
+    )
+  }
+  if (grade === 'typical' && nominal !== null && nominal > TYPICAL_MATTERS_DB) {
+    const source = basisOf(item)
+    yield flag(
+      item,
+      'typical-not-maximum',
+      'grade',
+      `is a typical value${source ? ` (${source})` : ''}, not a guaranteed maximum.`,
+      'Ask its owner for the maximum, or give a tolerance that reaches it.',
+    )
+  }
+}
+
+function* groups(item: LineItem): Generator<FlagDraft> {
+  if (!groupOffWithoutNote(item.line)) return
+  yield flag(
+    item,
+    'group-off-without-note',
+    'groupNote',
+    'is said to vary on its own without a reason; it stays in the group of its assembly.',
+    'Write why it varies on its own, or clear the group.',
+  )
+}
+
+/** Kinds whose numbers are most often misread for want of saying what they include. */
+const MUST_SAY = ['connector', 'cable', 'package']
+
+function* coverCodes(item: LineItem): Generator<FlagDraft> {
+  const { kind, covers } = item.line
+  if (kind === null) return
+  if (covers === null) {
+    if (!MUST_SAY.includes(kind)) return
+    yield flag(item, 'covers-not-said', 'covers', 'does not say what its number includes.', 'Tick what it covers.')
+    return
+  }
+  const known: readonly string[] = COVERS[kind]
+  const foreign = covers.split(' ').filter((code) => code !== '' && !known.includes(code))
+  if (foreign.length === 0) return
+  yield flag(
+    item,
+    'covers-not-of-kind',
+    'covers',
+    `is a ${kind} and covers ${foreign.join(', ')}, which its kind cannot.`,
+    'Tick what it covers again.',
+  )
+}
+
+/** Fixtures that an overlap takes out again are accounted for. */
+function* fixtures(budget: Budget, item: LineItem): Generator<FlagDraft> {
+  const evidence = livingRecord(budget, 'evidence', item.line.evidence ?? item.lossClass?.evidence ?? null)
+  const said = item.line.covers?.split(' ').includes('test-fixtures') ?? false
+  if (!said && evidence?.fixtures !== 'in') return
+  const overlaps = Object.values(budget.lines).filter(({ kind, removed }) => kind === 'overlap' && !removed)
+  if (overlaps.some(({ overlapA, overlapB }) => overlapA === item.id || overlapB === item.id)) return
+  const why = said ? 'its number covers them' : `its file ${nameOf('evidence', item.line.evidence, evidence)} says so`
+  yield flag(
+    item,
+    'fixtures-in',
+    said ? 'covers' : 'evidence',
+    `contains test fixtures: ${why}.`,
+    'Take the number with the fixtures removed, or subtract them by an overlap line that names both lines.',
+  )
+}
+
+function flag(item: LineItem, code: FlagDraft['code'], field: string, message: string, todo: string): FlagDraft {
+  return {
+    code,
+    section: 'lines',
+    id: item.id,
+    field,
+    message: `${nameOf('lines', item.id, item.line)} ${message}`,
+    todo,
+  }
+}

@@ -1,0 +1,100 @@
+import type { Judged } from '../allowance/judge'
+import type { Context } from '../context'
+import type { FlagDraft } from '../flags'
+import type { LineItem } from '../lineItem'
+import { rememberedLoss } from '../lossMemory'
+import { LOSS, typedValue } from '../quantities'
+import { nameOf } from '../record'
+import type { PlaneCode } from '../schema'
+import type { Check } from './check'
+
+const BALLS: readonly PlaneCode[] = ['tx-ball', 'rx-ball']
+const INSIDE_PACKAGE: readonly PlaneCode[] = ['tx-bump', 'rx-bump', 'tx-die', 'rx-die']
+
+/** Packages against the planes and against what the limit presumes. */
+export const packages: Check = function* ({ context, judged }) {
+  for (const one of judged) {
+    if (one.span.from === null || one.span.to === null) continue
+    yield* againstPlanes(context, one, one.span.from, one.span.to)
+    yield* againstPresumed(context, one)
+  }
+}
+
+function* againstPlanes(
+  context: Context,
+  { evaluation, span }: Judged,
+  from: string,
+  to: string,
+): Generator<FlagDraft> {
+  const codeOf = (plane: string) => context.budget.planes[plane]?.code ?? null
+  const ends = { from: codeOf(from), to: codeOf(to) }
+  const name = nameOf('allowances', evaluation.id, evaluation)
+  const found = span.items.filter(isPackage)
+  if (ends.from !== null && ends.to !== null && BALLS.includes(ends.from) && BALLS.includes(ends.to)) {
+    for (const item of found) {
+      yield {
+        code: 'package-between-balls',
+        section: 'lines',
+        id: item.id,
+        field: 'order',
+        message: `${nameOf('lines', item.id, item.line)} is a package and counts in ${name}, which goes from ball to ball.`,
+        todo: 'Move it outside the planes, or choose a limit that contains the packages.',
+      }
+    }
+    return
+  }
+  const [atFrom, atTo] = sides(span.items, span.items)
+  for (const [end, code, there] of [
+    ['from', ends.from, atFrom],
+    ['to', ends.to, atTo],
+  ] as const) {
+    if (code === null || !INSIDE_PACKAGE.includes(code) || there.length > 0) continue
+    yield {
+      code: 'no-package-from-bump',
+      section: 'allowances',
+      id: evaluation.id,
+      field: end,
+      message: `${name} ${end === 'from' ? 'starts' : 'ends'} at ${code}, and no package lies at that end.`,
+      todo: 'Add the package as a line between the planes, or choose the ball as the plane.',
+    }
+  }
+}
+
+/** A package's decibels may lie outside the planes and still be more than the limit presumes. */
+function* againstPresumed(context: Context, { evaluation, span, allowance }: Judged): Generator<FlagDraft> {
+  const presumed = typedValue(LOSS, allowance.presumedPackage)
+  if (presumed === null || evaluation.atHz === null) return
+  const { mistake } = context.signalling
+  for (const side of sides(context.items, span.items)) {
+    let sum = 0
+    for (const item of side) {
+      const asked = { hz: evaluation.atHz, reference: context.reference, corner: null, mistake }
+      sum += rememberedLoss(item, 0, asked).nominal ?? 0
+    }
+    const [first] = side
+    if (first === undefined || sum <= presumed + 1e-9) continue
+    yield {
+      code: 'package-above-presumed',
+      section: 'lines',
+      id: first.id,
+      field: 'loss',
+      message: `${side.map(({ id, line }) => nameOf('lines', id, line)).join(' and ')}: ${sum.toFixed(2)} dB of package at one end; ${nameOf('allowances', evaluation.id, evaluation)} presumes at most ${presumed.toFixed(2)} dB.`,
+      todo: 'Take the difference off the limit, or have the package improved.',
+    }
+  }
+}
+
+/** Package lines at the transmitter's end and at the receiver's: before and after the first other piece between the planes. */
+function sides(items: readonly LineItem[], between: readonly LineItem[]): [LineItem[], LineItem[]] {
+  const parting = between.find((item) => !isPackage(item) && item.line.kind !== 'die')
+  const middle = parting === undefined ? items.length / 2 : items.indexOf(parting)
+  const found = items.map((item, index) => ({ item, index })).filter(({ item }) => isPackage(item))
+  return [
+    found.filter(({ index }) => index < middle).map(({ item }) => item),
+    found.filter(({ index }) => index >= middle).map(({ item }) => item),
+  ]
+}
+
+function isPackage({ line }: LineItem): boolean {
+  return line.kind === 'package'
+}

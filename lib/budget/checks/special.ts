@@ -1,0 +1,85 @@
+import type { Judged } from '../allowance/judge'
+import { overlapIn } from '../allowance/overlap'
+import type { Context } from '../context'
+import type { FlagDraft } from '../flags'
+import type { LineItem } from '../lineItem'
+import { nameOf } from '../record'
+import type { Check } from './check'
+
+/** Overlap and reserve lines. */
+export const special: Check = function* ({ context, judged, lines }) {
+  for (const item of context.items) {
+    if (item.line.kind !== 'overlap') continue
+    yield* overlaps(context, item, judged)
+    const own = lines[item.id]?.loss.nominalDb ?? null
+    for (const named of [item.line.overlapA, item.line.overlapB]) {
+      const whole = named === null ? null : (lines[named]?.loss.nominalDb ?? null)
+      if (own === null || whole === null || own <= whole) continue
+      yield flag(
+        item,
+        'overlap-too-large',
+        'loss',
+        `is larger than the line ${nameOf('lines', named, context.budget.lines[named ?? ''] ?? null)} that contains it.`,
+        'Correct the overlap, or name the right lines.',
+      )
+    }
+  }
+  for (const { span, conditions, allowance, evaluation } of judged) {
+    for (const item of span.items) {
+      const clash = item.line.kind === 'reserve' ? clashOf(item, conditions, allowance.judgedCorner !== null) : null
+      if (clash === null) continue
+      yield flag(
+        item,
+        'reserve-and-corner',
+        'purpose',
+        `holds back decibels for ${item.line.purpose}, and ${evaluation.name === '' ? 'an allowance' : `'${evaluation.name}'`} is judged ${clash}, which contains it already.`,
+        'Take the reserve out, or judge without.',
+      )
+    }
+  }
+}
+
+function* overlaps(context: Context, item: LineItem, judged: readonly Judged[]): Generator<FlagDraft> {
+  if (overlapIn(context, item, new Set()) === 'unnamed') {
+    yield flag(
+      item,
+      'overlap-unnamed',
+      item.line.overlapA === null ? 'overlapA' : 'overlapB',
+      'does not name two different lines of the channel that both contain the part.',
+      'Name both lines.',
+    )
+    return
+  }
+  for (const { span, evaluation } of judged) {
+    const between = new Set(span.items.map(({ id }) => id))
+    if (!between.has(item.id) || overlapIn(context, item, between) === 'subtracts') continue
+    yield flag(
+      item,
+      'overlap-outside-planes',
+      'overlapA',
+      `names a line outside the planes of ${evaluation.name === '' ? 'an allowance' : `'${evaluation.name}'`}; the part is counted once there, so nothing is subtracted.`,
+      'Name two lines between the planes, or move the overlap.',
+    )
+  }
+}
+
+function clashOf(item: LineItem, conditions: Judged['conditions'], corner: boolean): string | null {
+  const { purpose } = item.line
+  if (purpose === 'temperature' && corner && conditions.corner?.temperature != null)
+    return `at ${conditions.corner.name}`
+  if ((purpose === 'process' || purpose === 'measurement') && conditions.statistic !== 'nominal') {
+    return conditions.statistic === 'worst' ? 'at the worst case of all tolerances' : 'with the tolerances (RSS)'
+  }
+  return null
+}
+
+function flag(item: LineItem, code: FlagDraft['code'], field: string, message: string, todo: string): FlagDraft {
+  return {
+    code,
+    section: 'lines',
+    id: item.id,
+    field,
+    message: `${nameOf('lines', item.id, item.line)} ${message}`,
+    todo,
+  }
+}
