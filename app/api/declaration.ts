@@ -5,8 +5,12 @@ import type { ProblemCode } from './problems'
 /** Who may call: anybody; a person by cookie or token; a person by cookie only; the administrator; a member with this role. */
 export type Admission = 'open' | 'person' | 'session' | 'administrator' | { readonly role: Role }
 
-/** JSON of this shape; limit in bytes, else 64 kB. */
-export type JsonBody<S extends z.ZodType = z.ZodType> = { readonly json: S; readonly limit?: number }
+/** JSON of this shape; limit in bytes, else 64 kB. `parse` stands in for the schema's own reading where it says more. */
+export type JsonBody<S extends z.ZodType = z.ZodType> = {
+  readonly json: S
+  readonly limit?: number
+  readonly parse?: (value: unknown) => z.output<S>
+}
 /** Raw bytes of one of these media types; limit in bytes. */
 export type UploadBody = { readonly upload: readonly string[]; readonly limit: number }
 
@@ -38,6 +42,8 @@ export type Declaration<
   readonly headers?: H
   readonly body?: B
   readonly answer: Answer
+  /** Further answers that are no problems, such as 304. */
+  readonly also?: readonly Answer[]
   readonly problems?: readonly ProblemCode[]
 }
 

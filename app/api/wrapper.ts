@@ -96,7 +96,8 @@ async function readBody(body: JsonBody | UploadBody, request: Request): Promise<
     return { mediaType: requireMediaType(request.headers, body.upload), bytes: bytesOf(request, body.limit) }
   }
   requireMediaType(request.headers, ['application/json'])
-  return parseFields(body.json, await jsonOf(request, body.limit))
+  const value = await jsonOf(request, body.limit)
+  return body.parse ? body.parse(value) : parseFields(body.json, value)
 }
 
 function toResponse(reply: Reply | Response, status: number): Response {

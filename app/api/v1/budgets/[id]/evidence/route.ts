@@ -1,0 +1,13 @@
+import { change, read } from '../../../../wrapper'
+import { attachEvidence, listEvidence } from './declaration'
+
+export const dynamic = 'force-dynamic'
+
+export const GET = read(listEvidence, async ({ services, params }) => ({
+  json: { evidence: await services.evidence.list(params.id) },
+}))
+
+export const POST = change(attachEvidence, async ({ services, identity, params, query, body }) => {
+  const stored = await services.evidence.store(params.id, identity, { name: query.name, ...body })
+  return { json: stored, headers: { location: `/api/v1/budgets/${params.id}/evidence/${stored.sha256}` } }
+})
