@@ -88,7 +88,7 @@ export function LandingDrawing({
         <g className={css[`p-${personColour(was?.colour ?? 0)}`]}>
           <path d={`M${px(geometry.was.x - 22)} ${px(geometry.was.y)}h68`} className={css.was} />
           {words && (
-            <text x={px(geometry.was.x + 50)} y={px(geometry.was.y + 4)} className={css.wasWords}>
+            <text x={px(geometry.was.x + 50)} y={px(geometry.was.wordsY)} className={css.wasWords}>
               {geometry.was.words}
             </text>
           )}

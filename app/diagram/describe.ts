@@ -24,10 +24,10 @@ export function describeLevels(
     const plane = id === null ? undefined : budget.planes[id]
     return plane ? planeWords(plane) : 'a plane that is missing'
   }
-  const { figure, unit, sentence } = headline(allowance)
+  const { sentence } = headline(allowance)
   return (
     `The level from ${name(allowance.from)} to ${name(allowance.to)} over ${lines.length} lines: ` +
-    `${allowance.words} (${judgedWords(allowance, budget)}), ${figure} ${unit}. ${sentence}.${largestWords}`
+    `${allowance.words} (${judgedWords(allowance, budget)}). ${sentence}.${largestWords}`
   )
 }
 

@@ -32,7 +32,7 @@ export type LandingGeometry = {
   readonly requiredWords: string
   readonly belowWords: string
   readonly bars: readonly LandingBar[]
-  readonly was: { readonly y: number; readonly words: string; readonly x: number } | null
+  readonly was: { readonly x: number; readonly y: number; readonly words: string; readonly wordsY: number } | null
   /** Decibels above the ground at the upper and lower edge. */
   readonly span: readonly [number, number]
 }
@@ -68,7 +68,7 @@ export function layoutLanding(
     requiredWords: `${decibels(allowance.requiredMarginDb)} dB required`,
     belowWords: `below ${plainDecibels(allowance.limitDb)} dB`,
     bars,
-    was: was ? { y: y(was.marginDb), words: `was ${decibels(was.marginDb)}`, x: bars[0]?.x ?? 0 } : null,
+    was: was && wasAt(was, bars[0], y(was.marginDb)),
     span: [high, low],
   }
 }
@@ -110,4 +110,11 @@ function barOf(
     band: db !== null && whole && sigma !== null && sigma > 0 ? [at.y(db + sigma), at.y(db - sigma)] : null,
     unknown: db !== null && !whole ? [at.y(db), db > 0 ? at.y(0) : at.y(db) + 24] : null,
   }
+}
+
+/** The words keep clear of the figure that stands beside the bar. */
+function wasAt(was: Was, bar: LandingBar | undefined, y: number): NonNullable<LandingGeometry['was']> {
+  const barY = bar?.y ?? null
+  const away = barY === null || Math.abs(y - barY) >= 22 ? y : y >= barY ? barY + 22 : barY - 22
+  return { x: bar?.x ?? 0, y, words: `was ${decibels(was.marginDb)}`, wordsY: away + 4 }
 }

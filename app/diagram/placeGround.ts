@@ -45,15 +45,16 @@ function runLabel(name: string, figure: string, width: number): string | null {
 }
 
 /** Whose line it is, and its number, along the surface; crowded lines lose the number first, then the glyph. */
-export function glyphsOf(pieces: readonly Piece[], y: number): Glyph[] {
+export function glyphsOf(pieces: readonly Piece[], y: number, room: { left: number; right: number }): Glyph[] {
   const glyphs: Glyph[] = []
-  let free = Number.NEGATIVE_INFINITY
+  let free = room.left
   for (const piece of pieces) {
     const middle = (piece.from.x + piece.to.x) / 2
     const width = piece.to.x - piece.from.x
     const digits = workWidth(String(piece.number), NAME_SIZE)
     const withNumber = 22 + digits
-    if (width >= withNumber - 3 && middle - withNumber / 2 >= free - 2) {
+    const fits = middle - withNumber / 2 >= free - 2 && middle + withNumber / 2 <= room.right
+    if (fits && width >= withNumber - 3) {
       glyphs.push({ id: piece.id, x: middle - (digits + 3) / 2, y, number: piece.number, owner: piece.owner })
       free = middle + withNumber / 2
     } else if (middle - 8 >= free) {

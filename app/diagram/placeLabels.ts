@@ -38,8 +38,7 @@ export function labelsOf(pieces: readonly Piece[], sky: Sky): { labels: Label[];
     const placed = place(piece, sky.narrow && size === 'large' ? 'middle' : size, pieces, sky, boxes)
     if (!placed) continue
     labels.push(placed.label)
-    boxes.push(placed.box)
-    if (placed.label.leader) boxes.push(strip(placed.label.leader))
+    boxes.push(...placed.room)
   }
   return { labels, boxes: boxes.slice(sky.taken.length) }
 }
@@ -61,7 +60,9 @@ function place(piece: Piece, size: Label['size'], pieces: readonly Piece[], sky:
         const air = Math.max(sky.air(left), sky.air(centre), sky.air(left + width))
         const bottom = above - air - 8 - lift
         const box = { x: left, y: bottom - height, width, height }
-        if (!inSky(box, sky.plot) || taken.some((other) => overlaps(box, other, 3))) continue
+        const stem = lift === 0 ? null : leader(piece, centre, bottom)
+        const room = stem ? [box, strip(stem)] : [box]
+        if (!inSky(box, sky.plot) || room.some((own) => taken.some((other) => overlaps(own, other, 3)))) continue
         const label: Label = {
           id: piece.id,
           x: centre,
@@ -70,9 +71,9 @@ function place(piece: Piece, size: Label['size'], pieces: readonly Piece[], sky:
           name,
           size,
           typical,
-          leader: lift === 0 ? null : leader(piece, centre, bottom),
+          leader: stem,
         }
-        return { label, box }
+        return { label, room }
       }
     }
   }

@@ -24,7 +24,7 @@ export function shelvesOf(
     const y = vertical.y(first.fromDb + share.shareDb)
     const words = shareWords(share)
     const wordsAt = narrow ? null : roomFor(words, { x: first.from.x + 5, y: y + 4 }, pieces, vertical.surfaceY, taken)
-    const excess = share.usedDb - share.shareDb
+    const excess = -share.freeDb
     return [
       {
         id: share.id,
@@ -55,7 +55,7 @@ function stretchOf(share: ShareUse, pieces: readonly Piece[]): readonly Piece[] 
 
 function shareWords(share: ShareUse): readonly [string, string] {
   const given = `share ${plainDecibels(share.shareDb)}`
-  const left = share.shareDb - share.usedDb
+  const left = share.freeDb
   if (left < -0.005) return [given, `${decibels(share.usedDb)} used, ${decibels(-left)} past it`]
   if (share.undecidedLines.length > 0) return [given, `${decibels(share.usedDb)} used so far, ${decibels(left)} left`]
   return [given, left < 0.005 ? 'all used' : `${decibels(left)} left`]

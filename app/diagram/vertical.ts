@@ -25,8 +25,8 @@ export function verticalScale(room: Room, limitDb: number, deepestDb: number, ri
 }
 
 /** A levelling staff: a tick every decibel (every fifth where they would merge), a figure where there is room. */
-export function staffTicks(vertical: Vertical, limitDb: number | null, deepestDb: number): Tick[] {
-  const each = vertical.scale >= 4 ? 1 : 5
+export function staffTicks(vertical: Vertical, limitDb: number | null, deepestDb: number, narrow: boolean): Tick[] {
+  const each = vertical.scale >= (narrow ? 16 : 4) ? 1 : 5
   const figures = [1, 2, 5, 10, 20, 50, 100].find((step) => step * vertical.scale >= 38 && step % each === 0) ?? 100
   const last = limitDb ?? deepestDb
   const ticks: Tick[] = []

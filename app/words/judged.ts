@@ -5,16 +5,18 @@ import { STATISTIC_WORD } from './terms'
 
 type Judged = Pick<AllowanceEvaluation, 'id' | 'judged'>
 
-/** The corner's name: a margin never stands without it. */
+/** The corner's name, or the temperature of the reference corner: a margin never stands without it. */
 export function cornerWords(allowance: Judged, budget: Budget): string {
-  const named = budget.corners[allowance.judged.corner]?.name
-  return named?.trim() || allowance.judged.corner || 'reference corner'
+  const corner = budget.corners[allowance.judged.corner]
+  if (corner) return [corner.name?.trim() || 'corner', corner.temperature].filter(Boolean).join(', ')
+  return budget.head.referenceTemperature ?? allowance.judged.corner
 }
 
 /** Such as 'lane 11, the worst of 16'; empty where the link has one lane. */
 export function laneWords(allowance: Judged, budget: Budget): string {
   const { lane, lanes } = allowance.judged
-  if (lane === null || lanes <= 1) return ''
+  if (lanes <= 1) return ''
+  if (lane === null) return `all ${lanes} lanes alike`
   const chosen = budget.allowances[allowance.id]?.judgedLane ?? null
   return chosen === null ? `lane ${lane}, the worst of ${lanes}` : `lane ${lane} of ${lanes}`
 }

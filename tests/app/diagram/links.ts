@@ -59,6 +59,7 @@ export function linkOf(
     grade: (row[9] ?? 'nominal') as LineEvaluation['grade'],
     lengthM: row[5] === null ? null : row[5] * 0.0254,
     group: row[7],
+    lane: null,
   })
   const allowances = sums.map((sum): AllowanceEvaluation => {
     const from = rows.indexOf(sum.from ?? '')
@@ -253,10 +254,24 @@ export const osier = linkOf(
       leftDb: -1.11,
       rssDb: 1.33,
       shares: [
-        { id: 's1', of: { kind: 'assembly', ref: 'root' }, shareDb: 9, usedDb: 8.4, undecidedLines: [] },
-        { id: 's2', of: { kind: 'assembly', ref: 'system' }, shareDb: 16, usedDb: 17.16, undecidedLines: [] },
-        { id: 's3', of: { kind: 'assembly', ref: 'slot' }, shareDb: 1.5, usedDb: 1.5, undecidedLines: [] },
-        { id: 's4', of: { kind: 'assembly', ref: 'card' }, shareDb: 5.2, usedDb: 5.75, undecidedLines: [] },
+        { id: 's1', of: { kind: 'assembly', ref: 'root' }, shareDb: 9, usedDb: 8.4, freeDb: 0.6, undecidedLines: [] },
+        {
+          id: 's2',
+          of: { kind: 'assembly', ref: 'system' },
+          shareDb: 16,
+          usedDb: 17.16,
+          freeDb: -1.16,
+          undecidedLines: [],
+        },
+        { id: 's3', of: { kind: 'assembly', ref: 'slot' }, shareDb: 1.5, usedDb: 1.5, freeDb: 0, undecidedLines: [] },
+        {
+          id: 's4',
+          of: { kind: 'assembly', ref: 'card' },
+          shareDb: 5.2,
+          usedDb: 5.75,
+          freeDb: -0.55,
+          undecidedLines: [],
+        },
       ],
     },
   ],
@@ -294,8 +309,22 @@ export const upstream = linkOf(
       knownDb: 26.81,
       leftDb: 9.19,
       shares: [
-        { id: 's4', of: { kind: 'assembly', ref: 'card' }, shareDb: 9.5, usedDb: 1.25, undecidedLines: ['l1', 'l3'] },
-        { id: 's2', of: { kind: 'assembly', ref: 'system' }, shareDb: 16, usedDb: 17.16, undecidedLines: [] },
+        {
+          id: 's4',
+          of: { kind: 'assembly', ref: 'card' },
+          shareDb: 9.5,
+          usedDb: 1.25,
+          freeDb: 8.25,
+          undecidedLines: ['l1', 'l3'],
+        },
+        {
+          id: 's2',
+          of: { kind: 'assembly', ref: 'system' },
+          shareDb: 16,
+          usedDb: 17.16,
+          freeDb: -1.16,
+          undecidedLines: [],
+        },
       ],
     },
   ],
