@@ -81,7 +81,7 @@ export function GridCell({ spec, of, children, className = '', look }: Props) {
         </>
       )}
       <Standing others={slip.others} />
-      <Aside slip={slip} id={aside} />
+      <Aside slip={slip} id={aside} floating />
     </Cell>
   )
 }

@@ -4,12 +4,12 @@ import { Pennant, personColour } from '../../../../marks/Pennant'
 import css from './slips.module.css'
 import type { Slip } from './useSlip'
 
-/** Under a slip: why it was not taken, and what another person has made of it meanwhile. */
-export function Aside({ slip, id }: { slip: Slip; id: string }) {
+/** Under a slip: why it was not taken, and what another person has made of it meanwhile. `floating`: over the rows below. */
+export function Aside({ slip, id, floating = false }: { slip: Slip; id: string; floating?: boolean }) {
   const reason = slip.draft?.reason ?? null
   if (reason === null && slip.meanwhile === null) return null
   return (
-    <span id={id} className={css.aside}>
+    <span id={id} className={`${css.aside} ${floating ? css.floating : ''}`}>
       {reason !== null && <span className={css.reason}>{reason}</span>}
       {slip.meanwhile !== null && (
         <span className={css.meanwhile}>

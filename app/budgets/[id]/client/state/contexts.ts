@@ -21,6 +21,7 @@ export type Bench = SheetDeeds & {
 export type Selected = { readonly section: 'lines' | 'planes'; readonly id: string }
 
 export type View = {
+  readonly budgetId: string
   readonly selected: Selected | null
   readonly select: (row: Selected | null) => void
   /** Where there is no room beside the rows, the detail is a sheet that is opened by hand. */

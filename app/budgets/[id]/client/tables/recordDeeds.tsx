@@ -1,0 +1,70 @@
+'use client'
+import type { Scalar } from '../../../../../lib/budget/schema'
+import { addRecord, removedOnes, setField } from '../deeds/records'
+import { useBench, useReading, useView } from '../state/contexts'
+import { RECORD_WORDS } from '../words/labels'
+import { recordName } from '../words/say'
+import type { TableSection } from './RecordTable'
+import css from './tables.module.css'
+
+export function AddRecord({ section, fresh }: { section: TableSection; fresh: Readonly<Record<string, Scalar>> }) {
+  const { canWrite, edit, read } = useBench()
+  const { goTo } = useView()
+  if (!canWrite) return null
+  const add = () => {
+    const added = addRecord(read(), section, fresh)
+    if (edit(added.operations) === null) goTo({ section, id: added.id, field: null })
+  }
+  return (
+    <button type="button" className={css.button} onClick={add}>
+      Add {/^[aeiou]/.test(RECORD_WORDS[section]) ? 'an' : 'a'} {RECORD_WORDS[section]}
+    </button>
+  )
+}
+
+export function TakeOut({ section, id }: { section: TableSection; id: string }) {
+  const { budget } = useReading()
+  const { canWrite, edit } = useBench()
+  if (!canWrite) return null
+  return (
+    <button
+      type="button"
+      className={css.button}
+      aria-label={`Take out ${recordName(budget, section, id)}`}
+      onClick={() => edit([setField(section, id, 'removed', true)])}
+    >
+      Take out
+    </button>
+  )
+}
+
+/** Records that were taken out, to be put back. Nothing is ever deleted. */
+export function TakenOut({ section }: { section: TableSection | 'lines' | 'planes' }) {
+  const { budget } = useReading()
+  const { canWrite, edit } = useBench()
+  const gone = removedOnes<{ order: string; removed: boolean }>(budget[section])
+  if (gone.length === 0) return null
+  return (
+    <details className={css.gone}>
+      <summary>
+        {gone.length} taken out ({RECORD_WORDS[section]})
+      </summary>
+      <ul>
+        {gone.map(([id]) => (
+          <li key={id}>
+            {recordName(budget, section, id)}{' '}
+            {canWrite && (
+              <button
+                type="button"
+                className={css.button}
+                onClick={() => edit([setField(section, id, 'removed', false)])}
+              >
+                Put back
+              </button>
+            )}
+          </li>
+        ))}
+      </ul>
+    </details>
+  )
+}

@@ -1,0 +1,24 @@
+import type { TrailEntry } from '../../../../../lib/sheet/wire'
+
+/** One step of the margin: what it was after an entry. */
+export type Step = {
+  readonly seq: number
+  readonly time: number
+  readonly personName: string
+  /** dB; null where it was undecided: the line is broken there. */
+  readonly marginDb: number | null
+  readonly verdict: string
+}
+
+/**
+ * The margin of an allowance over the trail, oldest first. Entries without an effect on it leave it as it was and make no
+ * step. @param entries newest first
+ */
+export function marginSteps(entries: readonly TrailEntry[], allowance: string): readonly Step[] {
+  return [...entries].reverse().flatMap((entry) => {
+    const after = entry.effects.find((effect) => effect.allowance === allowance)?.after
+    if (!after) return []
+    const { seq, time, personName } = entry
+    return [{ seq, time, personName, marginDb: after.marginDb, verdict: after.verdict }]
+  })
+}
