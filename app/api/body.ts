@@ -1,7 +1,7 @@
 import { readJson } from '../../lib/budget/jsonText'
 import { Problem } from './problem'
 
-const JSON_LIMIT = 64 * 1024
+export const JSON_LIMIT = 64 * 1024
 
 /** Media type without its parameters, in small letters. */
 function mediaTypeOf(headers: Headers): string {
@@ -14,11 +14,13 @@ export function requireMediaType(headers: Headers, types: readonly string[]): st
   return type
 }
 
-/**
- * The body's bytes as they arrive. @throws Problem 'too-large' as soon as more than `limit` bytes are announced or have come
- */
+/** @throws Problem 'too-large' where more than `limit` bytes are announced, before any of them is read */
+export function requireSize(headers: Headers, limit: number): void {
+  if (Number(headers.get('content-length') ?? 0) > limit) throw tooLarge(limit)
+}
+
+/** The body's bytes as they arrive. @throws Problem 'too-large' as soon as more than `limit` bytes have come */
 export async function* bytesOf(request: Request, limit: number): AsyncGenerator<Uint8Array> {
-  refuseAnnounced(request.headers, limit)
   if (!request.body) return
   const reader = request.body.getReader()
   let size = 0
@@ -36,7 +38,7 @@ export async function* bytesOf(request: Request, limit: number): AsyncGenerator<
 }
 
 /** @throws Problem 'too-large' or 'bad-json' */
-export async function jsonOf(request: Request, limit = JSON_LIMIT): Promise<unknown> {
+export async function jsonOf(request: Request, limit: number): Promise<unknown> {
   const chunks: Uint8Array[] = []
   for await (const chunk of bytesOf(request, limit)) chunks.push(chunk)
   let text: string
@@ -49,11 +51,6 @@ export async function jsonOf(request: Request, limit = JSON_LIMIT): Promise<unkn
   if ('value' in read) return read.value
   const { line, column, message } = read.problem
   throw new Problem('bad-json', { detail: `Line ${line}, column ${column}: ${message}` })
-}
-
-function refuseAnnounced(headers: Headers, limit: number): void {
-  const announced = Number(headers.get('content-length') ?? 0)
-  if (announced > limit) throw tooLarge(limit)
 }
 
 function tooLarge(limit: number): Problem {

@@ -5,7 +5,7 @@ import type { Identity } from '../../lib/access/identity'
 import type { Services } from '../../lib/sync/services'
 import { publishedServices } from '../services'
 import { admit } from './admission'
-import { bytesOf, jsonOf, requireMediaType } from './body'
+import { bytesOf, JSON_LIMIT, jsonOf, requireMediaType, requireSize } from './body'
 import type { Admission, Declaration, JsonBody, ParamsOf, UploadBody } from './declaration'
 import { parseFields } from './fields'
 import { Problem, problemResponse } from './problem'
@@ -92,11 +92,12 @@ function namedHeaders(schema: z.ZodObject, headers: Headers): Record<string, str
 }
 
 async function readBody(body: JsonBody | UploadBody, request: Request): Promise<unknown> {
-  if ('upload' in body) {
-    return { mediaType: requireMediaType(request.headers, body.upload), bytes: bytesOf(request, body.limit) }
-  }
-  requireMediaType(request.headers, ['application/json'])
-  const value = await jsonOf(request, body.limit)
+  const upload = 'upload' in body
+  const mediaType = requireMediaType(request.headers, upload ? body.upload : ['application/json'])
+  const limit = body.limit ?? JSON_LIMIT
+  requireSize(request.headers, limit)
+  if (upload) return { mediaType, bytes: bytesOf(request, limit) }
+  const value = await jsonOf(request, limit)
   return body.parse ? body.parse(value) : parseFields(body.json, value)
 }
 
