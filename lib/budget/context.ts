@@ -1,6 +1,7 @@
 import type { Evaluation } from './evaluation'
 import type { Lanes } from './lanes'
 import type { LineItem } from './lineItem'
+import type { Losses } from './losses'
 import { compareOrder, inOrder } from './record'
 import type { Budget } from './schema'
 import type { Signalling } from './signalling'
@@ -14,8 +15,7 @@ export type Context = {
   /** Living lines and planes in channel order. */
   readonly rows: Evaluation['rows']
   readonly lanes: Lanes
-  /** Ω, differential. */
-  readonly reference: number | null
+  readonly losses: Losses
   /** °C. */
   readonly referenceTemperature: number | null
 }

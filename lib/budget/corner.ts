@@ -15,11 +15,14 @@ export type Conditions = {
   readonly reference: number | null
 }
 
-/** Reads a corner. @returns a sentence that says why it cannot be judged, where it cannot. */
+/** Reads a corner. @returns why it cannot be judged, where it cannot, as half a sentence. */
 export function conditionsOf(id: string, corner: RecordOf<'corners'>, reference: number | null): Conditions | string {
   const name = nameOf('corners', id, corner)
+  if (corner.temperature === null && corner.humidity === null && corner.fabrication === null) {
+    return `the corner ${name} says neither a temperature nor a humidity`
+  }
   if (corner.fabrication !== null && corner.fabrication !== 'nominal') {
-    return `The corner ${name} asks for an extreme of fabrication, which this version does not compute; judge the worst statistic instead.`
+    return `the corner ${name} asks for an extreme of fabrication, which this version does not compute (the worst statistic is)`
   }
   return {
     name,
@@ -44,7 +47,7 @@ export function holdsIn(line: Line, lossClass: LossClass | null) {
  * By what a line's loss grows from the conditions that its number holds in to the corner: 1 + coefficient × kelvins for traces
  * and cable, and the typed growth from dry to wet for traces. What a number already contains is not added again: one that holds
  * at the corner's temperature does not move, one that holds wet does not grow, and a guaranteed maximum is never lowered.
- * @returns the factor, or a sentence that says what lacks
+ * @returns the factor, or what lacks, as half a sentence
  */
 export function cornerFactor(line: Line, lossClass: LossClass | null, corner: Conditions): number | string {
   if (!isUniform(line)) return 1
@@ -54,7 +57,7 @@ export function cornerFactor(line: Line, lossClass: LossClass | null, corner: Co
   let factor = warm
   if (corner.wet && line.kind === 'trace' && holds.humidity !== 'wet') {
     if (corner.lossWet === null)
-      return `The corner ${corner.name} is wet and does not say by how much the loss of traces grows; type it.`
+      return `the corner ${corner.name} is wet and does not say by how much the loss of traces grows`
     factor *= 1 + corner.lossWet
   }
   return holds.grade === 'maximum' ? Math.max(1, factor) : factor
@@ -64,11 +67,11 @@ function temperatureFactor(own: number | null, corner: Conditions): number | str
   if (corner.temperature === null) return 1
   const from = own ?? corner.reference
   if (from === null)
-    return `The temperature of the reference corner is not given, so the way to ${corner.name} is unknown; type it.`
+    return `the temperature of the reference corner is not given, so how far it is to the corner ${corner.name} is unknown`
   if (from === corner.temperature) return 1
   if (corner.perKelvin === null) {
-    return `The corner ${corner.name} does not say by how much the loss of traces and cable grows per kelvin; type it, such as 0.12 %/K.`
+    return `the corner ${corner.name} does not say by how much the loss of traces and cable grows per kelvin`
   }
   const factor = 1 + corner.perKelvin * (corner.temperature - from)
-  return factor > 0 ? factor : `The growth per kelvin of the corner ${corner.name} leaves no loss at all; correct it.`
+  return factor > 0 ? factor : `the growth per kelvin of the corner ${corner.name} leaves no loss at all`
 }

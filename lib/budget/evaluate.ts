@@ -7,6 +7,7 @@ import { flagsOf } from './flagsOf'
 import { lanesOf } from './lanes'
 import { lineEvaluations } from './lineEvaluation'
 import { lineItems } from './lineItem'
+import { Losses } from './losses'
 import { RESISTANCE, TEMPERATURE, typedValue } from './quantities'
 import { inOrder } from './record'
 import type { Budget } from './schema'
@@ -20,13 +21,14 @@ import { signallingOf } from './signalling'
  */
 export function evaluate(budget: Budget, _evidence: EvidenceData): Evaluation {
   const items = lineItems(budget)
+  const signalling = signallingOf(budget.head)
   const context: Context = {
     budget,
-    signalling: signallingOf(budget.head),
+    signalling,
     items,
     rows: rowsOf(budget, items),
     lanes: lanesOf(budget, items),
-    reference: typedValue(RESISTANCE, budget.head.reference),
+    losses: new Losses(typedValue(RESISTANCE, budget.head.reference), signalling.mistake),
     referenceTemperature: typedValue(TEMPERATURE, budget.head.referenceTemperature),
   }
   const judged = inOrder(budget, 'allowances').map(([id, allowance]) => judge(context, id, allowance))

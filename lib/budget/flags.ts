@@ -44,6 +44,7 @@ export const FLAGS = {
   'nobody-counts': ['warning', 'No neighbour counts an item.'],
   'fixtures-in': ['warning', 'Test fixtures are contained in a number.'],
   'package-between-balls': ['warning', 'A package is counted in an allowance from ball to ball.'],
+  'die-outside-planes': ['warning', 'A die is counted in an allowance that does not reach it.'],
   'no-package-from-bump': ['warning', 'An allowance from bump or die has no package at that end.'],
   'package-above-presumed': ['warning', 'A package is lossier than the limit presumes.'],
   'allowance-frequency-missing': ['warning', 'An allowance does not say its frequency.'],

@@ -4,22 +4,57 @@ import { FLAGS, type FlagDraft, flagOf } from './flags'
 
 const SEVERITIES = ['problem', 'warning', 'notice'] as const
 
+/** A flag that a line raised, and the lane that it was looked at in; null: as it stands for all lanes. */
+export type LineDraft = { readonly draft: FlagDraft; readonly lane: number | null }
+
 /** All flags of an evaluation, each said once, problems first. */
-export function flagsOf(checked: Checked, lineDrafts: readonly FlagDraft[]): Flag[] {
+export function flagsOf(checked: Checked, lineDrafts: readonly LineDraft[]): Flag[] {
   const { context, judged } = checked
+  const inSums = judged.flatMap(({ lanes }) =>
+    lanes.flatMap(({ lines }) =>
+      lines.flatMap(({ item, loss }) => loss.drafts.map((draft) => ({ draft, lane: item.lane }))),
+    ),
+  )
   const drafts = [
     ...context.signalling.drafts,
-    ...lineDrafts,
-    ...judged.flatMap(({ lanes }) => lanes.flatMap(({ lines }) => lines.flatMap(({ loss }) => loss.drafts))),
+    ...acrossLanes([...lineDrafts, ...inSums]),
     ...context.lanes.drafts,
     ...CHECKS.flatMap((check) => [...check(checked)]),
   ]
-  const once = new Map<string, FlagDraft>()
-  for (const draft of drafts) {
-    const key = `${draft.code}\n${draft.section}\n${draft.id}\n${draft.field}\n${draft.message}`
-    if (!once.has(key)) once.set(key, draft)
+  return drafts.map(flagOf).sort((a, b) => rank(a) - rank(b))
+}
+
+/** Said once for a line, and once more for all lanes in which something else is wrong than in the line itself. */
+function acrossLanes(drafts: readonly LineDraft[]): FlagDraft[] {
+  const own = new Map<string, FlagDraft>()
+  const inLanes = new Map<string, { readonly draft: FlagDraft; readonly lanes: Set<number> }>()
+  for (const { draft, lane } of drafts) {
+    if (lane === null) own.set(`${keyOf(draft)}\n${draft.message}`, draft)
   }
-  return [...once.values()].map(flagOf).sort((a, b) => rank(a) - rank(b))
+  for (const { draft, lane } of drafts) {
+    if (lane === null || own.has(`${keyOf(draft)}\n${draft.message}`)) continue
+    const known = inLanes.get(keyOf(draft)) ?? { draft, lanes: new Set<number>() }
+    known.lanes.add(lane)
+    inLanes.set(keyOf(draft), known)
+  }
+  const ofLanes = [...inLanes.values()].map(({ draft, lanes }) => ({
+    ...draft,
+    message: `${draft.message} (${laneWords([...lanes].sort((a, b) => a - b))})`,
+  }))
+  return [...own.values(), ...ofLanes]
+}
+
+function keyOf({ code, section, id, field }: FlagDraft): string {
+  return `${code}\n${section}\n${id}\n${field}`
+}
+
+/** Lanes named before the rest is counted. */
+const NAMED = 4
+
+function laneWords(lanes: readonly number[]): string {
+  if (lanes.length === 1) return `lane ${lanes[0]}`
+  const named = lanes.slice(0, NAMED).join(', ')
+  return lanes.length > NAMED ? `lanes ${named} and ${lanes.length - NAMED} more` : `lanes ${named}`
 }
 
 function rank({ code }: Flag): number {

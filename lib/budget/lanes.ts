@@ -35,7 +35,7 @@ export function lanesOf(budget: Budget, items: readonly LineItem[]): Lanes {
     if (!ofLine) continue
     const lanes = new Map<number, LineItem>()
     for (const [lane, fields] of ofLine) {
-      if (lane <= count) lanes.set(lane, itemOf(budget, item.id, { ...item.line, ...fields }))
+      if (lane <= count) lanes.set(lane, itemOf(budget, item.id, { ...item.line, ...fields }, lane))
     }
     const beyond = [...ofLine.keys()].filter((lane) => lane > count).sort((a, b) => a - b)
     if (beyond.length > 0) drafts.push(beyondCount(item, beyond, count))

@@ -1,17 +1,16 @@
 import type { Context } from './context'
 import type { LineEvaluation, LossAt } from './evaluation'
-import type { FlagDraft } from './flags'
+import type { LineDraft } from './flagsOf'
 import { basisOf, gradeOf, groupOf, type LineItem, ownerOf } from './lineItem'
 import type { LineLoss } from './lineLoss'
-import { rememberedLoss } from './lossMemory'
 import { LENGTH, typedValue } from './quantities'
 
 /** Every line at the Nyquist frequency in the reference corner, in the lane where it is worst. */
 export function lineEvaluations(context: Context): {
   readonly evaluations: Record<string, LineEvaluation>
-  readonly drafts: FlagDraft[]
+  readonly drafts: LineDraft[]
 } {
-  const drafts: FlagDraft[] = []
+  const drafts: LineDraft[] = []
   const evaluations = context.items.map((own): [string, LineEvaluation] => {
     const { item, lane, loss } = worstLane(context, own, drafts)
     return [
@@ -34,17 +33,16 @@ export function lineEvaluations(context: Context): {
 type InLane = { readonly item: LineItem; readonly lane: number | null; readonly loss: LineLoss | null }
 
 /** A lane without a number is worse than any with one. */
-function worstLane(context: Context, own: LineItem, drafts: FlagDraft[]): InLane {
+function worstLane(context: Context, own: LineItem, drafts: LineDraft[]): InLane {
   const hz = context.signalling.evaluation.nyquist
   if (hz === null) return { item: own, lane: null, loss: null }
-  const asked = { hz, reference: context.reference, corner: null, mistake: context.signalling.mistake }
   const differing = context.lanes.differing.get(own.id)
   const candidates: InLane[] = []
   if ((differing?.size ?? 0) < context.lanes.count) {
-    candidates.push({ item: own, lane: null, loss: rememberedLoss(own, 0, asked) })
+    candidates.push({ item: own, lane: null, loss: context.losses.at(own, hz, null) })
   }
-  for (const [lane, item] of differing ?? []) candidates.push({ item, lane, loss: rememberedLoss(item, lane, asked) })
-  for (const { loss } of candidates) drafts.push(...(loss?.drafts ?? []))
+  for (const [lane, item] of differing ?? []) candidates.push({ item, lane, loss: context.losses.at(item, hz, null) })
+  for (const { lane, loss } of candidates) drafts.push(...(loss?.drafts ?? []).map((draft) => ({ draft, lane })))
   return candidates.reduce((worst, next) => (height(next) > height(worst) ? next : worst))
 }
 

@@ -5,19 +5,22 @@ import type { Assembly, Basis, Budget, Grade, Line, LossClass, Owner } from './s
 export type LineItem = {
   readonly id: string
   readonly line: Line
+  /** The lane whose values the line has; null: the line as it stands for all lanes. */
+  readonly lane: number | null
   readonly assembly: Assembly | null
   /** The loss class, where the line's model uses one. */
   readonly lossClass: LossClass | null
 }
 
 export function lineItems(budget: Budget): LineItem[] {
-  return inOrder(budget, 'lines').map(([id, line]) => itemOf(budget, id, line))
+  return inOrder(budget, 'lines').map(([id, line]) => itemOf(budget, id, line, null))
 }
 
-export function itemOf(budget: Budget, id: string, line: Line): LineItem {
+export function itemOf(budget: Budget, id: string, line: Line, lane: number | null): LineItem {
   return {
     id,
     line,
+    lane,
     assembly: livingRecord(budget, 'assemblies', line.assembly),
     lossClass: line.model === 'class' ? livingRecord(budget, 'lossClasses', line.lossClass) : null,
   }

@@ -24,7 +24,7 @@ export type LineLoss = {
   readonly nominal: number | null
   readonly by: LossAt['by']
   readonly spread: Spread
-  /** Why the corner cannot be judged for this line, in a sentence; the number is then that of the reference corner. */
+  /** Why the corner cannot be judged for this line, as half a sentence; the number is then that of the reference corner. */
   readonly cornerUnknown: string | null
   readonly drafts: readonly FlagDraft[]
 }
@@ -34,13 +34,13 @@ const NO_SPREAD: Spread = { lowExtreme: 0, highExtreme: 0, lowThreeSigma: 0, hig
 /** The loss of one line at one frequency: model, corner, skew inside the pair, tolerance. Pure. */
 export function lineLoss(item: LineItem, asked: Asked): LineLoss {
   const drafts: FlagDraft[] = []
-  const fields = new Findings('lines', item.id, item.line, drafts)
+  const fields = Findings.ofLine(item.id, item.line, drafts)
   const classId = item.line.lossClass ?? ''
   const found = modelOf(item.line)({
     line: item.line,
     fields,
     lossClass: item.lossClass,
-    classFields: item.lossClass && new Findings('lossClasses', classId, item.lossClass, drafts),
+    classFields: item.lossClass && Findings.ofClass(fields, classId, item.lossClass),
     hz: asked.hz,
     reference: asked.reference,
     mistake: asked.mistake,

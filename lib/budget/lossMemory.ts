@@ -1,13 +1,11 @@
-import type { Conditions } from './corner'
 import type { LineItem } from './lineItem'
 import { type Asked, type LineLoss, lineLoss } from './lineLoss'
-import type { Line, LossClass } from './schema'
 
 type Kept = {
-  readonly line: Line
-  readonly lossClass: LossClass | null
+  readonly line: object
+  readonly lossClass: object | null
+  readonly corner: object | null
   readonly asked: Asked
-  readonly corner: Conditions | null
   readonly result: LineLoss
 }
 
@@ -21,30 +19,33 @@ let size = 0
 /**
  * lineLoss, remembered by content: the values of the line and its loss class are compared, not their identity, because a
  * caller may change a budget in place or build it anew for every edit.
- * @param lane lane whose values the line has, or 0
  */
-export function rememberedLoss(item: LineItem, lane: number, asked: Asked): LineLoss {
-  const key = `${item.id}/${lane}/${asked.hz}`
-  const entries = kept.get(key)
-  const known = entries?.find((entry) => matches(entry, item, asked))
-  if (known) return known.result
+export function rememberedLoss(item: LineItem, asked: Asked): LineLoss {
+  const key = `${item.id}/${item.lane ?? ''}/${asked.hz}`
+  const entries = kept.get(key) ?? []
+  for (const entry of entries) if (matches(entry, item, asked)) return entry.result
   const result = lineLoss(item, asked)
   if (size >= MOST) {
     kept.clear()
     size = 0
   }
-  const entry = {
+  const newest = {
     line: { ...item.line },
     lossClass: item.lossClass && { ...item.lossClass },
-    asked,
     corner: asked.corner && { ...asked.corner },
+    asked,
     result,
   }
-  if (!entries || size === 0) kept.set(key, [entry])
-  else if (entries.length < PER_KEY) entries.push(entry)
-  else entries.splice(0, 1, ...entries.slice(1), entry)
-  size++
+  const others = size === 0 ? [] : entries.slice(0, PER_KEY - 1)
+  kept.set(key, [newest, ...others])
+  size += others.length < entries.length ? 0 : 1
   return result
+}
+
+/** Forgets everything: for measuring, and for showing that remembering changes nothing. */
+export function forgetLosses(): void {
+  kept.clear()
+  size = 0
 }
 
 function matches(entry: Kept, item: LineItem, asked: Asked): boolean {
@@ -60,7 +61,7 @@ function matches(entry: Kept, item: LineItem, asked: Asked): boolean {
 /** Whether two flat records hold the same values. Records of one kind have the same fields. */
 function same(a: object | null, b: object | null): boolean {
   if (a === null || b === null) return a === b
-  const other = b as Record<string, unknown>
-  for (const [field, value] of Object.entries(a)) if (other[field] !== value) return false
+  const [one, other] = [a as Record<string, unknown>, b as Record<string, unknown>]
+  for (const field in one) if (one[field] !== other[field]) return false
   return true
 }

@@ -76,7 +76,8 @@ const UNKNOWN: SignallingEvaluation = {
 
 function statement(head: Head, input: RateInput, rates: Rates): string {
   const bits = Number(rates.bitsPerSymbol.toPrecision(5))
-  const symbols = `${input.code}, ${bits} ${bits === 1 ? 'bit' : 'bits'} per symbol, ${formatScaled(rates.symbolRate, 'symbolRate', 9)}`
+  const ideal = input.group === null && !Number.isInteger(bits) ? ' (the ideal; a code carries less)' : ''
+  const symbols = `${input.code}, ${bits} ${bits === 1 ? 'bit' : 'bits'} per symbol${ideal}, ${formatScaled(rates.symbolRate, 'symbolRate', 9)}`
   const nyquist = `Nyquist frequency ${formatScaled(rates.nyquist, 'frequency', 9)}`
   const convention =
     input.code === 'RZ'

@@ -27,7 +27,7 @@ export function judgedConditions(context: Context, allowance: Allowance): Judged
   const corner = livingRecord(context.budget, 'corners', judgedCorner)
   const conditions = corner
     ? conditionsOf(judgedCorner, corner, context.referenceTemperature)
-    : 'The corner that it is to be judged at does not exist or was taken out.'
+    : 'the corner that it is to be judged at does not exist or was taken out'
   if (typeof conditions === 'string') {
     return { statistic, lane: judgedLane, corner: null, problem: conditions, problemField: 'judgedCorner' }
   }

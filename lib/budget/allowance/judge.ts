@@ -4,6 +4,7 @@ import type { Context } from '../context'
 import type { AllowanceEvaluation } from '../evaluation'
 import { basisOf, type LineItem } from '../lineItem'
 import { FREQUENCY, LOSS, typedValue } from '../quantities'
+import { nameOf } from '../record'
 import type { Allowance, Basis } from '../schema'
 import { type JudgedConditions, judgedConditions } from './conditions'
 import { type LaneSum, laneSums } from './laneSums'
@@ -119,7 +120,7 @@ function evaluationOf(context: Context, id: string, allowance: Allowance, parts:
     },
     verdict: judgement.verdict,
     words: judgement.words,
-    reasons: [...judgement.reasons, ...facts.unknown.map((what) => `the ${what} is not judged in this version`)],
+    reasons: reasonsOf(judgement, lane, facts.unknown),
     from: span.from,
     to: span.to,
     knownDb: known,
@@ -134,6 +135,16 @@ function evaluationOf(context: Context, id: string, allowance: Allowance, parts:
     lines: lane.lines.map(countedLine),
     shares: sharesOf(context.budget, id, lane.lines),
   }
+}
+
+/** The verdict's own reasons, the lines without a number, and what is not judged, as half sentences. */
+function reasonsOf(judgement: Judgement, lane: LaneSum, unknown: readonly string[]): string[] {
+  const open = lane.lines.filter(({ item }) => lane.sum.undecided.includes(item.id))
+  return [
+    ...judgement.reasons,
+    ...open.map(({ item }) => `${nameOf('lines', item.id, item.line)} has no number`),
+    ...unknown.map((what) => `the ${what} is not judged in this version`),
+  ]
 }
 
 /** Nominal decibels by where they come from; overlaps subtract. */

@@ -2,7 +2,6 @@ import type { Context } from '../context'
 import { distinctLanes, inLane } from '../lanes'
 import type { LineItem } from '../lineItem'
 import type { LineLoss } from '../lineLoss'
-import { rememberedLoss } from '../lossMemory'
 import type { Allowance } from '../schema'
 import type { JudgedConditions } from './conditions'
 import { overlapIn } from './overlap'
@@ -14,7 +13,7 @@ export type LaneSum = {
   readonly number: number
   readonly lines: readonly Counted[]
   readonly sum: Sum
-  /** Why the corner cannot be judged in this lane, in a sentence. */
+  /** Why the corner cannot be judged in this lane, as half a sentence. */
   readonly cornerUnknown: string | null
 }
 
@@ -34,8 +33,8 @@ export function laneSums(
     const lines = span.items.map((own, index) => {
       const item = inLane(context.lanes, own, number)
       const sign = signs[index] ?? 'unnamed'
-      const loss =
-        atHz === null || sign === 'unnamed' ? NO_NUMBER : lossIn(context, own, item, number, conditions, atHz)
+      const given = atHz !== null && sign !== 'unnamed'
+      const loss = given ? context.losses.at(item, atHz, conditions.corner) : NO_NUMBER
       return { item, sign: sign === 'unnamed' ? (-1 as const) : sign, loss }
     })
     return laneSum(number, lines)
@@ -54,18 +53,6 @@ function signOf(context: Context, item: LineItem, between: ReadonlySet<string>):
   if (item.line.kind !== 'overlap') return 1
   const how = overlapIn(context, item, between)
   return how === 'subtracts' ? -1 : how === 'outside' ? 0 : 'unnamed'
-}
-
-function lossIn(
-  context: Context,
-  own: LineItem,
-  item: LineItem,
-  lane: number,
-  conditions: JudgedConditions,
-  hz: number,
-): LineLoss {
-  const asked = { hz, reference: context.reference, corner: conditions.corner, mistake: context.signalling.mistake }
-  return rememberedLoss(item, item === own ? 0 : lane, asked)
 }
 
 function laneSum(number: number, lines: readonly Counted[]): LaneSum {

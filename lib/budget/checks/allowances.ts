@@ -47,8 +47,8 @@ function* undecidable(one: Judged): Generator<FlagDraft> {
       one,
       'corner-not-judged',
       'judgedCorner',
-      `cannot be judged in its corner; the decibels shown are those of the reference corner. ${corner}`,
-      'Complete the corner, or judge in the reference corner.',
+      `cannot be judged in its corner: ${corner}. The decibels shown are those of the reference corner.`,
+      'Complete the corner (such as 65 °C and 0.12 %/K), or judge in the reference corner.',
     )
   }
 }

@@ -2,13 +2,13 @@ import type { Judged } from '../allowance/judge'
 import type { Context } from '../context'
 import type { FlagDraft } from '../flags'
 import type { LineItem } from '../lineItem'
-import { rememberedLoss } from '../lossMemory'
 import { LOSS, typedValue } from '../quantities'
 import { nameOf } from '../record'
 import type { PlaneCode } from '../schema'
 import type { Check } from './check'
 
 const BALLS: readonly PlaneCode[] = ['tx-ball', 'rx-ball']
+const DIES: readonly PlaneCode[] = ['tx-die', 'rx-die']
 const INSIDE_PACKAGE: readonly PlaneCode[] = ['tx-bump', 'rx-bump', 'tx-die', 'rx-die']
 
 /** Packages against the planes and against what the limit presumes. */
@@ -30,6 +30,7 @@ function* againstPlanes(
   const ends = { from: codeOf(from), to: codeOf(to) }
   const name = nameOf('allowances', evaluation.id, evaluation)
   const found = span.items.filter(isPackage)
+  yield* dies(span.items, ends, name)
   if (ends.from !== null && ends.to !== null && BALLS.includes(ends.from) && BALLS.includes(ends.to)) {
     for (const item of found) {
       yield {
@@ -60,16 +61,34 @@ function* againstPlanes(
   }
 }
 
+/** The die's pad lies outside the bump. */
+function* dies(
+  items: readonly LineItem[],
+  ends: { readonly from: PlaneCode | null; readonly to: PlaneCode | null },
+  name: string,
+): Generator<FlagDraft> {
+  if (ends.from === null || ends.to === null || DIES.includes(ends.from) || DIES.includes(ends.to)) return
+  for (const { id, line } of items) {
+    if (line.kind !== 'die') continue
+    yield {
+      code: 'die-outside-planes',
+      section: 'lines',
+      id,
+      field: 'order',
+      message: `${nameOf('lines', id, line)} is part of a die and counts in ${name}, which does not reach the die.`,
+      todo: 'Move it outside the planes, or choose a limit that contains the die.',
+    }
+  }
+}
+
 /** A package's decibels may lie outside the planes and still be more than the limit presumes. */
 function* againstPresumed(context: Context, { evaluation, span, allowance }: Judged): Generator<FlagDraft> {
   const presumed = typedValue(LOSS, allowance.presumedPackage)
   if (presumed === null || evaluation.atHz === null) return
-  const { mistake } = context.signalling
   for (const side of sides(context.items, span.items)) {
     let sum = 0
     for (const item of side) {
-      const asked = { hz: evaluation.atHz, reference: context.reference, corner: null, mistake }
-      sum += rememberedLoss(item, 0, asked).nominal ?? 0
+      sum += context.losses.at(item, evaluation.atHz, null).nominal ?? 0
     }
     const [first] = side
     if (first === undefined || sum <= presumed + 1e-9) continue

@@ -1,6 +1,6 @@
 import { discreteLoss, type Moved, moveUniformLoss } from '../../channel/lines'
 import { formatScaled } from '../../channel/units'
-import type { Findings } from '../findings'
+import type { Owner } from '../findings'
 import { isUniform } from '../uniform'
 import type { ModelInput, ModelLoss } from './model'
 
@@ -9,20 +9,13 @@ import type { ModelInput, ModelLoss } from './model'
  * cable, never moved for a discrete.
  * @param owner the record that says the frequency in its field 'at'
  */
-export function atFrequency(
-  input: ModelInput,
-  owner: Findings<'lines'> | Findings<'lossClasses'>,
-  db: number,
-  statedHz: number,
-): ModelLoss | null {
+export function atFrequency(input: ModelInput, owner: Owner, db: number, statedHz: number): ModelLoss | null {
   const uniform = isUniform(input.line)
   const moved = uniform ? moveUniformLoss(db, statedHz, input.hz) : discreteLoss(db, statedHz, input.hz)
   if (moved === null) return refuse(input, owner, statedHz, uniform)
   if (moved.spreadDb > 0) warn(input, owner, statedHz, moved)
   return { db: moved.db, by: moved.by, spreadDb: moved.spreadDb }
 }
-
-type Owner = Findings<'lines'> | Findings<'lossClasses'>
 
 function refuse(input: ModelInput, owner: Owner, statedHz: number, uniform: boolean): null {
   const mistake = input.mistake(statedHz)
@@ -45,7 +38,7 @@ function warn(input: ModelInput, owner: Owner, statedHz: number, moved: Moved): 
   owner.say(
     'moved-with-spread',
     'at',
-    `${owner.name}: moved from ${formatScaled(statedHz, 'frequency')} to ${formatScaled(input.hz, 'frequency')} between the √f and the f law; ±${moved.spreadDb.toFixed(2)} dB was added to the tolerance${owner === input.fields ? '' : ` of '${input.line.name ?? ''}'`}.`,
+    `${owner.name}: moved from ${formatScaled(statedHz, 'frequency')} to ${formatScaled(input.hz, 'frequency')} between the √f and the f law; ±${moved.spreadDb.toFixed(2)} dB was added to the tolerance.`,
     `Give the loss at ${formatScaled(input.hz, 'frequency')}.`,
   )
 }

@@ -1,6 +1,6 @@
 import { interpolate, type Point, parsePoints } from '../../channel/tables'
 import { formatScaled } from '../../channel/units'
-import type { Findings } from '../findings'
+import type { Owner } from '../findings'
 import type { Model, ModelInput, ModelLoss } from './model'
 
 /** Points of loss over frequency, interpolated and never extrapolated. */
@@ -31,7 +31,7 @@ const COARSE_SHARE = 0.02
  */
 export function fromPoints(
   input: ModelInput,
-  owner: Findings<'lines'> | Findings<'lossClasses'>,
+  owner: Owner,
   points: readonly Point[],
   factor: number,
 ): ModelLoss | null {
@@ -53,7 +53,7 @@ export function fromPoints(
     owner.say(
       'coarse-table',
       'points',
-      `${owner.name}: the points around ${asked} lie far apart; a power law through them differs from the straight line by ${differs.toFixed(2)} dB${owner === input.fields ? '' : ` over the length of '${input.line.name ?? ''}'`}.`,
+      `${owner.name}: the points around ${asked} lie far apart; a power law through them differs from the straight line by ${differs.toFixed(2)} dB.`,
       `Add a point near ${asked}.`,
     )
   }

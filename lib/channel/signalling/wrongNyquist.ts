@@ -9,8 +9,10 @@ const CLOSE = 0.005
 const RS544: Overhead = { payload: 514, sent: 544 }
 const BLOCK_257: Overhead = { payload: 256, sent: 257 }
 const BLOCK_66: Overhead = { payload: 64, sent: 66 }
+const BLOCK_10: Overhead = { payload: 8, sent: 10 }
 /** Rate classes of common electrical interfaces double from 28 Gb/s on; the rates sent lie a few percent below. */
 const CLASS_RATE = 28e9
+const BELOW_CLASS = 1.12
 
 type Mistake = { readonly hz: number; readonly what: string }
 
@@ -22,60 +24,70 @@ type Mistake = { readonly hz: number; readonly what: string }
  */
 export function usualMistake(hz: number, input: RateInput, rates: Rates): string | null {
   if (Math.abs(hz / rates.nyquist - 1) <= SAME) return null
-  let best: Mistake | null = null
+  let best: string | null = null
+  let nearest = CLOSE
   for (const mistake of mistakes(input, rates)) {
-    if (Math.abs(mistake.hz / rates.nyquist - 1) <= SAME) continue
     const off = Math.abs(hz / mistake.hz - 1)
-    if (off <= CLOSE && (best === null || off < Math.abs(hz / best.hz - 1) - 1e-9)) best = mistake
+    if (Math.abs(mistake.hz / rates.nyquist - 1) <= SAME || off > nearest - (best === null ? 0 : 1e-9)) continue
+    best = mistake.what
+    nearest = off
   }
-  return best?.what ?? null
+  return best
 }
 
 function* mistakes(input: RateInput, rates: Rates): Generator<Mistake> {
-  const nyquistAt = (bitRate: number) => bitRate / rates.bitsPerSymbol / 2
+  const { lineRate, symbolRate, bitsPerSymbol } = rates
   const levels = LEVELS[input.code]
-  const single = rates.symbolRate === rates.lineRate
+  const oneBit = symbolRate === lineRate
   yield {
-    hz: rates.symbolRate,
-    what: single
-      ? 'the bit rate, which is the symbol rate here; the Nyquist frequency is half of it'
-      : 'the symbol rate; the Nyquist frequency is half of it',
+    hz: symbolRate,
+    what: `the ${oneBit ? 'bit rate, which is the ' : ''}symbol rate; the Nyquist frequency is half of it`,
   }
-  yield { hz: rates.lineRate, what: 'the bit rate itself' }
+  yield { hz: lineRate, what: 'the bit rate itself' }
   yield {
-    hz: rates.lineRate / levels,
+    hz: lineRate / levels,
     what: `the bit rate divided by the ${levels} levels instead of by the bits per symbol`,
   }
-  if (!single) yield { hz: rates.lineRate / 2, what: 'the Nyquist frequency as if the code were NRZ' }
-  if (levels === 2) yield { hz: rates.lineRate / 4, what: 'the Nyquist frequency as if the code were PAM4' }
-  yield* withoutOverhead(input, rates, nyquistAt)
-  const step = Math.ceil(Math.log2(rates.lineRate / CLASS_RATE) - 1e-9)
-  const classRate = CLASS_RATE * 2 ** step
-  if (classRate / rates.lineRate < 1.12) {
-    yield {
-      hz: nyquistAt(classRate),
-      what: `the Nyquist frequency of the ${classRate / 1e9} Gb/s rate class, not of the rate sent`,
-    }
+  if (!oneBit) yield { hz: lineRate / 2, what: 'the Nyquist frequency as if the code were NRZ' }
+  if (levels === 2) yield { hz: lineRate / 4, what: 'the Nyquist frequency as if the code were PAM4' }
+  for (const { rate, what } of otherRates(input, rates)) {
+    yield { hz: rate / bitsPerSymbol / 2, what: `the Nyquist frequency ${what}` }
+    if (!oneBit) yield { hz: rate / levels, what: `the bit rate ${what}, divided by the ${levels} levels` }
+    yield { hz: rate, what: `the bit rate ${what}` }
   }
 }
 
-/** Rates before coding or FEC, or with an overhead of another kind. Where the budget does not say its overheads, the usual ones are tried. */
-function* withoutOverhead(input: RateInput, rates: Rates, nyquistAt: (bitRate: number) => number): Generator<Mistake> {
+/** Bit rates that are mistaken for the rate sent. */
+function* otherRates(input: RateInput, rates: Rates): Generator<{ rate: number; what: string }> {
   const said = input.blockCode !== null || input.fec !== null
-  const blockCode = said ? input.blockCode : BLOCK_257
-  const fec = said ? input.fec : RS544
-  const payload = rates.payloadRate ?? rates.lineRate / (overheadOf(blockCode) * overheadOf(fec))
-  const maybe = said ? '' : ', if the rate sent contains 256b/257b and RS(544,514)'
-  yield { hz: nyquistAt(payload), what: `the Nyquist frequency of the payload, without coding and FEC${maybe}` }
+  yield* said ? beforeOverhead(input, rates) : beforeUsualOverhead(rates.lineRate)
+  const classRate = CLASS_RATE * 2 ** Math.ceil(Math.log2(rates.lineRate / CLASS_RATE) - 1e-9)
+  if (classRate < rates.lineRate * BELOW_CLASS) {
+    yield { rate: classRate, what: `of the ${classRate / 1e9} Gb/s rate class, not of the rate sent` }
+  }
+}
+
+/** The rate at each step of the overheads that the budget says, and one of them put on twice. */
+function* beforeOverhead({ blockCode, fec }: RateInput, rates: Rates): Generator<{ rate: number; what: string }> {
+  const [block, code] = [overheadOf(blockCode), overheadOf(fec)]
+  const payload = rates.lineRate / (block * code)
+  yield { rate: payload, what: 'of the payload, without coding and FEC' }
   if (fec !== null) {
-    yield { hz: nyquistAt(payload * overheadOf(blockCode)), what: `the Nyquist frequency without the FEC${maybe}` }
-    yield {
-      hz: nyquistAt(payload * overheadOf(BLOCK_66)),
-      what: `the Nyquist frequency with 64b/66b coding and without the FEC${maybe}`,
-    }
-    yield { hz: nyquistAt(rates.lineRate * overheadOf(fec)), what: 'the Nyquist frequency with the FEC counted twice' }
+    yield { rate: payload * block, what: 'without the FEC' }
+    yield { rate: payload * overheadOf(BLOCK_66), what: 'with 64b/66b coding and without the FEC' }
   }
-  if (blockCode !== null && fec !== null) {
-    yield { hz: nyquistAt(payload * overheadOf(fec)), what: `the Nyquist frequency without the block code${maybe}` }
-  }
+  if (blockCode !== null && fec !== null) yield { rate: payload * code, what: 'without the block code' }
+  yield { rate: rates.lineRate * block * code, what: 'with coding and FEC counted twice' }
+  if (fec !== null) yield { rate: rates.lineRate * code, what: 'with the FEC counted twice' }
+}
+
+/** Where the budget does not say its overheads: the rate as if it contained a usual one. */
+function* beforeUsualOverhead(lineRate: number): Generator<{ rate: number; what: string }> {
+  const strong = overheadOf(BLOCK_257) * overheadOf(RS544)
+  const given = ', if the rate sent contains 256b/257b and RS(544,514)'
+  yield { rate: lineRate / overheadOf(BLOCK_66), what: 'without 64b/66b coding, if the rate sent contains it' }
+  yield { rate: lineRate / overheadOf(BLOCK_10), what: 'without 8b/10b coding, if the rate sent contains it' }
+  yield { rate: lineRate / strong, what: `of the payload, without coding and FEC${given}` }
+  yield { rate: (lineRate / strong) * overheadOf(BLOCK_66), what: `with 64b/66b coding and without the FEC${given}` }
+  yield { rate: lineRate / overheadOf(RS544), what: `without the FEC${given}` }
 }
