@@ -15,7 +15,7 @@ export function formatQuantity<D extends Dimension>(
   const factor = (DIMENSIONS[dimension].units as Record<string, number>)[unit]
   if (factor === undefined) throw new RangeError(`'${unit}' is not a unit of ${dimension}`)
   if (!Number.isFinite(value)) throw new RangeError(`${value} is not a quantity`)
-  const text = plain(Number((value / factor).toPrecision(digits)))
+  const text = String(Number((value / factor).toPrecision(digits)) || 0)
   return unit === '' ? text : `${text} ${unit}`
 }
 
@@ -32,11 +32,4 @@ export function formatScaled(
   const fits = scaled.filter((unit) => rounded >= (units[unit] ?? 1) * (1 - 1e-12))
   const unit = fits.at(-1) ?? scaled[0] ?? ''
   return formatQuantity(value, dimension, unit as never, digits)
-}
-
-/** Digits without an exponent while that is readable. */
-function plain(value: number): string {
-  if (value === 0) return '0'
-  const text = String(value)
-  return text.includes('e-') && Math.abs(value) >= 1e-12 ? value.toFixed(20).replace(/0+$/, '') : text
 }

@@ -1,4 +1,5 @@
-import { DIMENSIONS, type Dimension, SPELLINGS } from './dimensions'
+import { DIMENSIONS, type Dimension } from './dimensions'
+import { unitOf } from './unit'
 
 export type Quantity = {
   /** Value in the SI unit of the dimension (temperature: °C; loss: dB). */
@@ -13,7 +14,8 @@ export type QuantityRefusal = {
   readonly reason: string
 }
 
-const NUMBER = /^([+\-−]?)(\d+(?:[.,]\d+)?|[.,]\d+)(?:[eE]([+\-−]?\d{1,3}))?/
+/** A sign (minus, true minus or en dash), digits with one point or comma, and a power of ten. */
+const NUMBER = /^([+\-−–]?)\s*(\d+(?:[.,]\d+)?|[.,]\d+)(?:[eE]([+\-−]?\d{1,3})(?!\d))?/
 
 /**
  * Reads a number with its unit as a person types it: '3.2 in', '120mil', '3,2 mm', '0.85 dB/in'.
@@ -22,11 +24,15 @@ const NUMBER = /^([+\-−]?)(\d+(?:[.,]\d+)?|[.,]\d+)(?:[eE]([+\-−]?\d{1,3}))?
  */
 export function parseQuantity(text: string, dimensions: Dimension | readonly Dimension[]): Quantity | QuantityRefusal {
   const wanted = typeof dimensions === 'string' ? [dimensions] : dimensions
-  const trimmed = text.trim().replace(/\u00a0|\u202f/g, ' ')
+  const trimmed = text.trim()
   if (trimmed === '') return { code: 'empty', reason: 'Type a number with its unit.' }
   const match = NUMBER.exec(trimmed)
   if (!match) return { code: 'not-a-number', reason: `Start with a number, such as ${example(wanted)}.` }
-  const [whole, sign, digits = '', exponent] = match
+  const [whole, sign = '', digits = '', exponent = '0'] = match
+  const rest = trimmed.slice(whole.length).trim()
+  if (/^[.,'’\d]/.test(rest)) {
+    return { code: 'not-a-number', reason: 'Type the number without thousands separators, such as 1234.5.' }
+  }
   if (/^[1-9]\d{0,2},\d{3}$/.test(digits)) {
     const [left, right] = digits.split(',')
     return {
@@ -34,22 +40,26 @@ export function parseQuantity(text: string, dimensions: Dimension | readonly Dim
       reason: `Does ${digits} mean ${left}${right} or ${left}.${right}? Type it without the comma or with a point.`,
     }
   }
-  const rest = trimmed.slice(whole.length).trim()
-  if (/^[.,\d]/.test(rest)) {
-    return { code: 'not-a-number', reason: 'Type the number without thousands separators, such as 1234.5.' }
-  }
-  const unit = SPELLINGS[rest] ?? rest
+  const decimal = digits.replace(',', '.')
   for (const dimension of wanted) {
-    const factor = (DIMENSIONS[dimension].units as Record<string, number>)[unit]
-    if (factor === undefined) continue
-    const power = exponent === undefined ? '' : `e${exponent.replace('−', '-')}`
-    const magnitude = Number(`${digits.replace(',', '.')}${power}`)
-    const value = (sign === '-' || sign === '−' ? -magnitude : magnitude) * factor
-    if (!Number.isFinite(value)) return { code: 'not-a-number', reason: 'The number is too large.' }
-    return { value: value === 0 ? 0 : value, unit, dimension }
+    const found = unitOf(rest, dimension)
+    if (found === null) continue
+    const magnitude = times(decimal, Number(exponent.replace('−', '-')), found.factor)
+    if (!Number.isFinite(magnitude)) return { code: 'not-a-number', reason: 'The number is too large.' }
+    if (magnitude === 0 && /[1-9]/.test(decimal)) return { code: 'not-a-number', reason: 'The number is too small.' }
+    const negative = sign !== '' && sign !== '+'
+    return { value: negative && magnitude !== 0 ? -magnitude : magnitude, unit: found.unit, dimension }
   }
-  if (unit === '') return { code: 'unit-missing', reason: `Add a unit: ${unitsOf(wanted)}.` }
+  if (rest === '') return { code: 'unit-missing', reason: `Add a unit: ${unitsOf(wanted)}.` }
   return { code: 'unit-unknown', reason: `'${rest}' is not a unit for this field; use ${unitsOf(wanted)}.` }
+}
+
+/** Digits × 10^exponent × factor. Where the factor is a power of ten too, the result is the double nearest to what was typed. */
+function times(decimal: string, exponent: number, factor: number): number {
+  const power = Math.round(Math.log10(factor))
+  return Number(`1e${power}`) === factor
+    ? Number(`${decimal}e${exponent + power}`)
+    : Number(`${decimal}e${exponent}`) * factor
 }
 
 export function isQuantity(result: Quantity | QuantityRefusal): result is Quantity {
