@@ -5,7 +5,14 @@ import { gap, type Refusal, Refuse, refuse } from './refusal'
 
 /** What a frame would bring. 'erased': it only deletes what somebody else has deleted meanwhile. */
 export type FrameVerdict =
-  | { readonly refused: null; readonly brings: 'something' | 'erased'; readonly end: number }
+  | {
+      readonly refused: null
+      readonly brings: 'something' | 'erased'
+      /** The clock of the client id after the edit. */
+      readonly end: number
+      /** Keys of the lane values that it writes. */
+      readonly lanes: readonly string[]
+    }
   | { readonly refused: Refusal }
 
 /**
@@ -13,19 +20,18 @@ export type FrameVerdict =
  * Never throws.
  * @param clientId the id that the edit's header names; all that the edit brings must be of this id
  * @param owned whether the id belongs to the person at the other end
- * @returns `end`: the clock of the client id after the edit
  */
 export function judgeFrame(shadow: Y.Doc, update: Uint8Array, clientId: number, owned: boolean): FrameVerdict {
   try {
     const edit = decodeEdit(update)
     const known = Y.getState(shadow.store, clientId)
     const fresh = freshStructs(shadow.store, edit, clientId, owned)
-    judgeItems(shadow, fresh)
+    const lanes = judgeItems(shadow, fresh)
     const last = fresh.at(-1)
     const end = last ? last.id.clock + last.length : known
     judgeRanges(shadow.store, edit.deletes, clientId, end)
-    if (last || erasesAnything(shadow.store, edit.deletes)) return { refused: null, brings: 'something', end }
-    if (edit.structs.length === 0 && edit.deletes.size > 0) return { refused: null, brings: 'erased', end }
+    if (last || erasesAnything(shadow.store, edit.deletes)) return { refused: null, brings: 'something', end, lanes }
+    if (edit.structs.length === 0 && edit.deletes.size > 0) return { refused: null, brings: 'erased', end, lanes }
     return refuse('malformed', 'The edit brings nothing new under a new edit id; reload the page.')
   } catch (cause) {
     if (cause instanceof Refuse) return { refused: cause.refusal }

@@ -9,8 +9,10 @@ type MadeSpot = Extract<Spot, { at: 'record' | 'note' }>
 /**
  * Judges the items that an edit brings, each at its spot. They are of one client id and follow each other without a hole,
  * so each hangs on earlier ones or on what the shadow holds. @throws Refuse
+ * @returns the keys of the lane values that are written
  */
-export function judgeItems(shadow: Y.Doc, structs: readonly Struct[]): void {
+export function judgeItems(shadow: Y.Doc, structs: readonly Struct[]): string[] {
+  const lanes: string[] = []
   const spots: (Spot | null)[] = []
   const made = new Set<string>()
   for (const struct of structs) {
@@ -19,9 +21,11 @@ export function judgeItems(shadow: Y.Doc, structs: readonly Struct[]): void {
     if (spot && struct instanceof Y.Item) {
       if (spot.at === 'record' || spot.at === 'note') judgeMade(shadow, spot, struct, made)
       judgeContent(spot, struct.content)
+      if (spot.at === 'lane') lanes.push(spot.key)
     }
     spots.push(spot)
   }
+  return lanes
 }
 
 /** Records and notes are made once and never replaced. */

@@ -1,0 +1,63 @@
+import { evaluate } from '../../budget/evaluate'
+import type { Evaluation } from '../../budget/evaluation'
+import type { Journal } from '../../records/journal/types'
+import { readBudget } from '../../sheet/seed'
+import { loadDocument } from '../room/load'
+import type { BudgetState } from '../room/room'
+import type { Locked, Rooms } from '../rooms'
+
+/** Budgets and evaluations that stay in memory. */
+const REMEMBERED = 200
+
+type Kept = BudgetState & { evaluation: Evaluation | null }
+
+/** Reads budgets and their evaluations as committed; each is computed once for one head. */
+export class Reader {
+  private readonly kept = new Map<string, Kept>()
+
+  constructor(
+    private readonly journal: Journal,
+    private readonly rooms: Rooms,
+  ) {}
+
+  /** @returns null where the journal does not hold the budget */
+  async read(budget: string): Promise<BudgetState | Locked | null> {
+    return this.find(budget)
+  }
+
+  async evaluation(budget: string): Promise<(BudgetState & { evaluation: Evaluation }) | Locked | null> {
+    const found = await this.find(budget)
+    if (found === null || 'locked' in found) return found
+    found.evaluation ??= evaluate(found.budget, new Map())
+    return { ...found, evaluation: found.evaluation }
+  }
+
+  private async find(budget: string): Promise<Kept | Locked | null> {
+    const open = this.rooms.peek(budget)
+    if (open) return this.keep(budget, open.state)
+    const locked = this.rooms.lockOf(budget)
+    if (locked) return locked
+    const head = await this.journal.head(budget)
+    if (!head) return null
+    const kept = this.kept.get(budget)
+    if (kept?.head.hash === head.hash) return kept
+    const loaded = await loadDocument(this.journal, budget)
+    if (loaded === null) return null
+    if ('damaged' in loaded) return this.rooms.lock(budget, loaded.damaged)
+    const state = { budget: readBudget(loaded.doc), head: loaded.head, lastEdit: loaded.lastEdit }
+    loaded.doc.destroy()
+    return this.keep(budget, state)
+  }
+
+  /** A binding moves the head and changes nothing, so the last edit says whether an evaluation still holds. */
+  private keep(budget: string, state: BudgetState): Kept {
+    const before = this.kept.get(budget)
+    const evaluation = before?.lastEdit.hash === state.lastEdit.hash ? before.evaluation : null
+    const kept = { ...state, evaluation }
+    this.kept.delete(budget)
+    this.kept.set(budget, kept)
+    const [oldest] = this.kept.keys()
+    if (this.kept.size > REMEMBERED && oldest !== undefined) this.kept.delete(oldest)
+    return kept
+  }
+}
