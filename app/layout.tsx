@@ -1,12 +1,14 @@
 import type { Metadata, Viewport } from 'next'
-import { cookies, headers } from 'next/headers'
 import type { ReactNode } from 'react'
 import { levelFont, workFont } from './fonts'
-import { THEME_COOKIE, themeFrom } from './theme'
+import { chosenTheme } from './shell/theme'
 import './tokens.css'
 import './global.css'
 
-/** Every page is made per request: it needs the person, the theme and the policy's nonce. */
+/**
+ * Every page is made per request: it needs the person and the theme, and Next puts the nonce of the request's own
+ * content-security-policy header (lib/server sets it) on every script that it writes.
+ */
 export const dynamic = 'force-dynamic'
 
 export const metadata: Metadata = {
@@ -25,12 +27,8 @@ export const viewport: Viewport = {
 }
 
 export default async function RootLayout({ children }: { children: ReactNode }) {
-  const theme = themeFrom((await cookies()).get(THEME_COOKIE)?.value)
-  // Next gives the nonce of the request's policy header to its own scripts; this is for those of other libraries.
-  const nonce = (await headers()).get('x-nonce') ?? undefined
   return (
-    <html lang="en" data-theme={theme} className={`${workFont.variable} ${levelFont.variable}`}>
-      <head>{nonce && <meta property="csp-nonce" nonce={nonce} />}</head>
+    <html lang="en" data-theme={await chosenTheme()} className={`${workFont.variable} ${levelFont.variable}`}>
       <body>{children}</body>
     </html>
   )

@@ -25,9 +25,11 @@ export type LevelDiagramProps = {
   readonly was?: Was | null
   /** px; under 640 the landing comes first and the drawing thins out. */
   readonly width: number
-  /** px of the drawing itself. */
+  /** px of the drawing itself; under 200 it is a strip without decibels by basis. */
   readonly height?: number
 }
+
+const STRIP = 200
 
 /** The heart of the screen: the level against the ground, and its landing enlarged. */
 export function LevelDiagram(props: LevelDiagramProps) {
@@ -71,7 +73,7 @@ export function LevelDiagram(props: LevelDiagramProps) {
         </svg>
         <Choice geometry={levels} onSelect={onSelect} selected={selected} width={width} />
       </div>
-      {!levels.legend && <BasisList evaluation={evaluation} allowance={allowance} />}
+      {!levels.legend && height >= STRIP && <BasisList evaluation={evaluation} allowance={allowance} />}
     </figure>
   )
 }

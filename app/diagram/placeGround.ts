@@ -5,6 +5,8 @@ import type { Glyph, Piece, Run } from './geometry'
 import { workWidth } from './text'
 
 const NAME_SIZE = 13
+/** Under this depth of ground there is no room for names below the glyphs, px. */
+const DEEP = 48
 
 /** The assemblies under the signal: neighbouring lines of one assembly are one stretch of ground. */
 export function runsOf(pieces: readonly Piece[], budget: Budget, surfaceY: number, bottom: number): Run[] {
@@ -18,6 +20,7 @@ export function runsOf(pieces: readonly Piece[], budget: Budget, surfaceY: numbe
     if (last && last[0]?.assembly === piece.assembly) last.push(piece)
     else stretches.push([piece])
   }
+  const deep = bottom - surfaceY >= DEEP
   return stretches.map((stretch) => {
     const assembly = stretch[0]?.assembly ?? null
     const x = stretch[0]?.from.x ?? 0
@@ -34,7 +37,7 @@ export function runsOf(pieces: readonly Piece[], budget: Budget, surfaceY: numbe
       width,
       height: bottom - surfaceY,
       knownDb,
-      label: runLabel(name, `${decibels(knownDb)} dB${unknown ? ' known' : ''}`, width),
+      label: deep ? runLabel(name, `${decibels(knownDb)} dB${unknown ? ' known' : ''}`, width) : null,
     }
   })
 }
