@@ -11,14 +11,14 @@ import { Group } from './Group'
 
 /** What the number includes, from the set of its kind. Nothing ticked can mean 'nothing else', and that must be said. */
 export function Covers({ id, line }: { id: string; line: Line }) {
-  const { canWrite, edit } = useBench()
+  const { canWrite, act } = useBench()
   const key = `lines/${id}/covers`
   const others = useContext(OthersContext).get(key) ?? []
   const unsaved = useContext(UnsavedContext).has(key)
   const known: readonly string[] = line.kind ? COVERS[line.kind] : []
   const ticked = line.covers?.split(' ').filter(Boolean) ?? []
   const codes = [...known, ...ticked.filter((code) => !known.includes(code))]
-  const write = (value: string | null) => edit([setField('lines', id, 'covers', value)])
+  const write = (value: string | null) => act([setField('lines', id, 'covers', value)])
   const toggle = (code: string) =>
     write(sortedSet(ticked.includes(code) ? ticked.filter((each) => each !== code) : [...ticked, code], COVER_CODES))
   return (

@@ -8,30 +8,30 @@ type Props = { readonly row: Selected; readonly removed: boolean; readonly assem
 
 /** What can be done with a row as a whole, for those without the keys. */
 export function RowDeeds({ row, removed, assembly }: Props) {
-  const { canWrite, edit, read } = useBench()
+  const { canWrite, act, read } = useBench()
   const { goTo } = useView()
   if (!canWrite) return null
   const add = () => {
     const added = addRow(read(), row.id, { section: 'lines', values: { assembly } })
-    if (edit(added.operations) === null) goTo({ section: 'lines', id: added.id, field: 'name' })
+    if (act(added.operations)) goTo({ section: 'lines', id: added.id, field: 'name' })
   }
   return (
     <div className={css.deeds}>
-      <button type="button" onClick={() => edit(moveRow(read(), row.id, -1))}>
+      <button type="button" onClick={() => act(moveRow(read(), row.id, -1))}>
         Move up
       </button>
-      <button type="button" onClick={() => edit(moveRow(read(), row.id, 1))}>
+      <button type="button" onClick={() => act(moveRow(read(), row.id, 1))}>
         Move down
       </button>
       <button type="button" onClick={add}>
         Add a line below
       </button>
       {removed ? (
-        <button type="button" onClick={() => edit(restoreRow(row))}>
+        <button type="button" onClick={() => act(restoreRow(row))}>
           Put back
         </button>
       ) : (
-        <button type="button" onClick={() => edit(removeRow(row))}>
+        <button type="button" onClick={() => act(removeRow(row))}>
           Take out
         </button>
       )}

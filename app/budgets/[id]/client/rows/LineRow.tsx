@@ -29,7 +29,7 @@ export type LineRowProps = {
 export const LineRow = memo(
   function LineRow(props: LineRowProps) {
     const { id, line, facts, selected, assembly, ground } = props
-    const { edit } = useBench()
+    const { act } = useBench()
     const of = line.name || 'line without a name'
     const state = [line.removed && 'taken out', facts.outside && 'outside the allowance'].filter(Boolean).join(', ')
     return (
@@ -48,7 +48,7 @@ export const LineRow = memo(
           section="lines"
           id={id}
           label={`line ${facts.number ?? ''} ${of}${state && `, ${state}`}`}
-          onRemove={() => edit(removeRow({ section: 'lines', id }))}
+          onRemove={() => act(removeRow({ section: 'lines', id }))}
         >
           {facts.number ?? '–'}
         </RowHead>

@@ -21,7 +21,7 @@ type Props = {
 
 /** A reference plane: a heavy rule with its post, between two lines. */
 export const PlaneRow = memo(function PlaneRow({ id, plane, selected, says }: Props) {
-  const { edit } = useBench()
+  const { act } = useBench()
   const of = planeWords(plane)
   return (
     <Row className={css.plane} data-row={id} data-gone={plane.removed || undefined} aria-selected={selected}>
@@ -29,7 +29,7 @@ export const PlaneRow = memo(function PlaneRow({ id, plane, selected, says }: Pr
         section="planes"
         id={id}
         label={`plane ${of}${plane.removed ? ', taken out' : ''}`}
-        onRemove={() => edit(removeRow({ section: 'planes', id }))}
+        onRemove={() => act(removeRow({ section: 'planes', id }))}
       >
         <span className={css.post} />
       </RowHead>

@@ -36,11 +36,11 @@ export function Rows() {
     const id = event.target instanceof Element ? event.target.closest<HTMLElement>('[data-row]')?.dataset.row : null
     if (!id || event.defaultPrevented || !bench.canWrite) return
     if (event.altKey && (event.key === 'ArrowUp' || event.key === 'ArrowDown')) {
-      bench.edit(moveRow(bench.read(), id, event.key === 'ArrowUp' ? -1 : 1))
+      bench.act(moveRow(bench.read(), id, event.key === 'ArrowUp' ? -1 : 1))
     } else if (event.key === 'Insert') {
       const blank: NewRow = { section: 'lines', values: { assembly: budget.lines[id]?.assembly ?? null } }
       const added = addRow(bench.read(), id, blank)
-      if (bench.edit(added.operations) === null) view.goTo({ section: 'lines', id: added.id, field: 'name' })
+      if (bench.act(added.operations)) view.goTo({ section: 'lines', id: added.id, field: 'name' })
     } else return
     event.preventDefault()
   }

@@ -10,7 +10,11 @@ export function Aside({ slip, id, floating = false }: { slip: Slip; id: string; 
   if (reason === null && slip.meanwhile === null) return null
   return (
     <span id={id} className={`${css.aside} ${floating ? css.floating : ''}`}>
-      {reason !== null && <span className={css.reason}>{reason}</span>}
+      {reason !== null && (
+        <span role="alert" className={css.reason}>
+          {reason}
+        </span>
+      )}
       {slip.meanwhile !== null && (
         <span className={css.meanwhile}>
           {slip.meanwhile === '' ? 'Somebody has emptied it meanwhile.' : `Meanwhile it says: ${slip.meanwhile}`}

@@ -2,6 +2,7 @@
 import { createContext, useContext } from 'react'
 import type { Evaluation } from '../../../../../lib/budget/evaluation'
 import type { Budget } from '../../../../../lib/budget/schema'
+import type { Operation } from '../../../../../lib/sheet/change'
 import type { Present } from '../../../../../lib/sheet/wire'
 import type { Drafts } from './drafts'
 import type { Roving } from './roving'
@@ -11,10 +12,17 @@ import type { SheetDeeds } from './sheet'
 export type Reading = { readonly budget: Budget; readonly evaluation: Evaluation }
 
 /** What does not change while the session lives: the deeds, and where drafts and the focus are kept. */
-export type Bench = SheetDeeds & {
+export type Bench = {
+  readonly canWrite: boolean
   readonly drafts: Drafts
   readonly roving: Roving
-  readonly canWrite: boolean
+  readonly read: SheetDeeds['read']
+  /** For slips, which show the answer themselves. */
+  readonly edit: SheetDeeds['edit']
+  /** For buttons and keys: a refusal is told to the person. @returns whether it was done */
+  readonly act: (operations: readonly Operation[]) => boolean
+  readonly undo: () => void
+  readonly redo: () => void
 }
 
 /** A line or a plane of the channel. */

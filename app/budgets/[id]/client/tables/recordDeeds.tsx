@@ -8,12 +8,12 @@ import type { TableSection } from './RecordTable'
 import css from './tables.module.css'
 
 export function AddRecord({ section, fresh }: { section: TableSection; fresh: Readonly<Record<string, Scalar>> }) {
-  const { canWrite, edit, read } = useBench()
+  const { canWrite, act, read } = useBench()
   const { goTo } = useView()
   if (!canWrite) return null
   const add = () => {
     const added = addRecord(read(), section, fresh)
-    if (edit(added.operations) === null) goTo({ section, id: added.id, field: null })
+    if (act(added.operations)) goTo({ section, id: added.id, field: null })
   }
   return (
     <button type="button" className={css.button} onClick={add}>
@@ -24,14 +24,14 @@ export function AddRecord({ section, fresh }: { section: TableSection; fresh: Re
 
 export function TakeOut({ section, id }: { section: TableSection; id: string }) {
   const { budget } = useReading()
-  const { canWrite, edit } = useBench()
+  const { canWrite, act } = useBench()
   if (!canWrite) return null
   return (
     <button
       type="button"
       className={css.button}
       aria-label={`Take out ${recordName(budget, section, id)}`}
-      onClick={() => edit([setField(section, id, 'removed', true)])}
+      onClick={() => act([setField(section, id, 'removed', true)])}
     >
       Take out
     </button>
@@ -41,7 +41,7 @@ export function TakeOut({ section, id }: { section: TableSection; id: string }) 
 /** Records that were taken out, to be put back. Nothing is ever deleted. */
 export function TakenOut({ section }: { section: TableSection | 'lines' | 'planes' }) {
   const { budget } = useReading()
-  const { canWrite, edit } = useBench()
+  const { canWrite, act } = useBench()
   const gone = removedOnes<{ order: string; removed: boolean }>(budget[section])
   if (gone.length === 0) return null
   return (
@@ -57,7 +57,7 @@ export function TakenOut({ section }: { section: TableSection | 'lines' | 'plane
               <button
                 type="button"
                 className={css.button}
-                onClick={() => edit([setField(section, id, 'removed', false)])}
+                onClick={() => act([setField(section, id, 'removed', false)])}
               >
                 Put back
               </button>

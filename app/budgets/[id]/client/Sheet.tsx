@@ -1,0 +1,88 @@
+'use client'
+import { type FocusEvent, type KeyboardEvent, useRef } from 'react'
+import type { Cell } from '../../../../lib/sheet/wire'
+import { Detail } from './detail/Detail'
+import { FlagsPanel } from './head/FlagsPanel'
+import { Head } from './head/Head'
+import { Headlines } from './head/Headline'
+import { Proof } from './head/Proof'
+import { RefusedList } from './head/RefusedList'
+import { Signalling } from './head/Signalling'
+import { Picture } from './picture/Picture'
+import { useWas } from './picture/useWas'
+import { KeysHelp } from './rows/KeysHelp'
+import { OpenLine } from './rows/OpenLine'
+import { Rows } from './rows/Rows'
+import css from './sheet.module.css'
+import { useBench, useReading, ViewContext } from './state/contexts'
+import { placeOf } from './state/focusPlace'
+import type { SheetState } from './state/sheet'
+import type { FirstState } from './state/useSheet'
+import { useViewState } from './state/useView'
+import { TakenOut } from './tables/recordDeeds'
+import { Tables } from './tables/Tables'
+import { TrailPanel } from './trail/TrailPanel'
+
+type Props = {
+  readonly first: FirstState
+  readonly state: SheetState
+  readonly stand: ((cell: Cell | null) => void) | null
+}
+
+/** One generation of the worksheet: everything on the page, and what the page as a whole does with focus and keys. */
+export function Sheet({ first, state, stand }: Props) {
+  const { budget, evaluation } = useReading()
+  const bench = useBench()
+  const root = useRef<HTMLDivElement>(null)
+  const view = useViewState(first.budgetId, evaluation, root)
+  const { trail, people } = state
+  const was = useWas({ trail, people, budget, person: first.person, allowance: view.allowance })
+
+  const onFocus = (event: FocusEvent) => {
+    const place = placeOf(event.target)
+    if (!place) return
+    stand?.(place)
+    const { section, id } = place
+    if (id !== null && (section === 'lines' || section === 'planes')) view.select({ section, id })
+  }
+  const onKeyDown = (event: KeyboardEvent) => {
+    const key = event.key.toLowerCase()
+    if (!(event.ctrlKey || event.metaKey) || event.altKey || (key !== 'z' && key !== 'y')) return
+    // While a value is being typed, the keys take back letters; after that, edits.
+    const typing = event.target instanceof Element && event.target.closest<HTMLElement>('[data-place]')
+    if (typing instanceof HTMLElement && bench.drafts.get(typing.dataset.place ?? '')) return
+    event.preventDefault()
+    if (key === 'y' || event.shiftKey) bench.redo()
+    else bench.undo()
+  }
+
+  return (
+    <ViewContext value={view}>
+      <section ref={root} aria-label="Worksheet" className={css.sheet} onFocus={onFocus} onKeyDown={onKeyDown}>
+        <Head state={state} />
+        <RefusedList refused={state.refused} />
+        <div className={css.verdicts}>
+          <Headlines />
+          <Proof />
+        </div>
+        <Signalling />
+        <Picture people={people} was={was} />
+        <div className={css.bench}>
+          <div className={css.rows}>
+            <Rows />
+            <OpenLine />
+            <KeysHelp />
+            <TakenOut section="lines" />
+            <TakenOut section="planes" />
+          </div>
+          <div className={css.beside}>
+            <Detail />
+            <TrailPanel recent={trail} />
+          </div>
+        </div>
+        <FlagsPanel />
+        <Tables />
+      </section>
+    </ViewContext>
+  )
+}

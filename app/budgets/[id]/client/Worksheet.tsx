@@ -1,0 +1,61 @@
+'use client'
+import { useCallback, useMemo, useState } from 'react'
+import { roleAllows } from '../../../../lib/sheet/roles'
+import { Announcer } from './head/Announcer'
+import { Sheet } from './Sheet'
+import { type Bench, BenchContext, OthersContext, ReadingContext, UnsavedContext } from './state/contexts'
+import { createDrafts } from './state/drafts'
+import { evaluated } from './state/evaluated'
+import { createRoving } from './state/roving'
+import { useAnnouncement } from './state/useAnnouncement'
+import { useOthers } from './state/useOthers'
+import { type FirstState, useSheet } from './state/useSheet'
+
+/**
+ * The worksheet of one budget. What must outlive a session (drafts, where the focus is) is kept here; the sheet below is
+ * built anew for each generation of it.
+ */
+export function Worksheet({ first }: { first: FirstState }) {
+  const { state, deeds } = useSheet(first)
+  const [drafts] = useState(createDrafts)
+  const [roving] = useState(createRoving)
+  const [refusal, setRefusal] = useState<string | null>(null)
+  const said = useAnnouncement(state.trail, first.person, state.budget)
+  const others = useOthers(state.people)
+  const canWrite = deeds !== null && roleAllows(state.role, 'editor') && state.connection.state !== 'closed'
+
+  const tell = useCallback((reason: string | null) => {
+    setRefusal(reason)
+    return reason === null
+  }, [])
+  const firstBudget = first.budget
+  const bench = useMemo<Bench>(
+    () => ({
+      canWrite,
+      drafts,
+      roving,
+      read: () => deeds?.read() ?? firstBudget,
+      edit: (operations) => (deeds ? deeds.edit(operations) : NOT_YET),
+      act: (operations) => tell(deeds ? deeds.edit(operations) : NOT_YET),
+      undo: () => tell(deeds ? deeds.undo() : NOT_YET),
+      redo: () => tell(deeds ? deeds.redo() : NOT_YET),
+    }),
+    [canWrite, drafts, roving, deeds, firstBudget, tell],
+  )
+  const reading = useMemo(() => ({ budget: state.budget, evaluation: evaluated(state.budget) }), [state.budget])
+
+  return (
+    <ReadingContext value={reading}>
+      <BenchContext value={bench}>
+        <UnsavedContext value={state.unsavedPlaces}>
+          <OthersContext value={others}>
+            <Sheet key={Math.max(1, state.generation)} first={first} state={state} stand={deeds?.stand ?? null} />
+            <Announcer said={said} refusal={refusal} onHeard={() => setRefusal(null)} />
+          </OthersContext>
+        </UnsavedContext>
+      </BenchContext>
+    </ReadingContext>
+  )
+}
+
+const NOT_YET = 'The worksheet is being loaded; try again in a moment.'

@@ -1,0 +1,46 @@
+/** A record, a field of it, or a section as a whole (id null). */
+export type Goal = { readonly section: string; readonly id: string | null; readonly field: string | null }
+
+/**
+ * Puts the focus on a place, wherever on the page it can be typed: in the rows before the detail.
+ * @returns false where it is not on the page (yet)
+ */
+export function focusPlace(root: ParentNode, goal: Goal): boolean {
+  const found = candidates(goal).flatMap((selector) => [...root.querySelectorAll<HTMLElement>(selector)])
+  for (const element of found) {
+    for (
+      let details = element.closest('details');
+      details;
+      details = details.parentElement?.closest('details') ?? null
+    ) {
+      details.open = true
+    }
+  }
+  const element = found.find((each) => each.checkVisibility()) ?? null
+  if (!element) return false
+  const target = element.tabIndex >= 0 || element.hasAttribute('tabindex') ? element : controlIn(element)
+  element.scrollIntoView({ block: 'nearest' })
+  target?.focus({ preventScroll: true })
+  return true
+}
+
+const controlIn = (element: HTMLElement) => element.querySelector<HTMLElement>('input, select, textarea, button')
+
+function candidates({ section, id, field }: Goal): readonly string[] {
+  const place = (key: string) => `[data-place="${CSS.escape(key)}"]`
+  if (section === 'laneValues') return [place(`lines/${id}/${field?.split('/')[1] ?? ''}`), place(`lines/${id}/`)]
+  const record = `${section}/${id ?? ''}/`
+  // Both sides of a tolerance stand in one slip, which is named after its upper side.
+  const named = field === 'toleranceMinus' ? 'tolerancePlus' : field
+  const exact = named === null ? [] : [place(record + named), place(`${record}${named}@row`)]
+  return [...exact, place(record), `[data-place^="${CSS.escape(record)}"]`]
+}
+
+/** The place that an element belongs to, from its `data-place`, or null. */
+export function placeOf(element: Element): Goal | null {
+  const key = element.closest<HTMLElement>('[data-place]')?.dataset.place?.replace(/@row$/, '')
+  const parts = key === undefined ? null : /^([^/]+)\/([^/]*)\/(.*)$/.exec(key)
+  if (!parts) return null
+  const [, section = '', id = '', field = ''] = parts
+  return { section, id: id || null, field: field === '' || field === 'flags' || field === 'add' ? null : field }
+}
