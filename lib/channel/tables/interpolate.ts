@@ -22,6 +22,7 @@ export function interpolate(points: readonly Point[], hz: number): Interpolated 
   const above = points.findIndex((point) => point.hz >= hz)
   const low = points[above - 1] ?? first
   const high = points[above] ?? last
+  if (high.hz === hz) return { value: high.value, differs: 0 }
   const value = low.value + ((high.value - low.value) * (hz - low.hz)) / (high.hz - low.hz)
   return { value, differs: Math.abs(powerLaw(low, high, hz) - value) }
 }
