@@ -84,6 +84,20 @@ export function captureUpdate(doc: Y.Doc, change: () => void): Uint8Array | null
   return updates.length === 0 ? null : Y.mergeUpdates(updates)
 }
 
+/** Writes each field that still holds its `before`, as one transaction; returns what it wrote. */
+export function writeFieldIfStill(doc: Y.Doc, writes: readonly FieldWrite[]): FieldWrite[] {
+  const done: FieldWrite[] = []
+  doc.transact(() => {
+    for (const write of writes) {
+      const { map, key } = entryAt(doc, write.place)
+      if (map.get(key) !== write.before) continue
+      map.set(key, write.after)
+      done.push(write)
+    }
+  }, WRITTEN)
+  return done
+}
+
 function make(doc: Y.Doc, operation: Operation): void {
   if (operation.op === 'add') {
     const { section, id, values } = operation

@@ -1,0 +1,6 @@
+export { type Fit, fitDeed } from './fit'
+export { openIndexedDb } from './indexedDb'
+export { createMemory } from './memory'
+export { Outbox } from './outbox'
+export type { Deed, Meta, OutboxRecord, RefusedRecord } from './record'
+export type { Batch, Storage, Stored } from './storage'
