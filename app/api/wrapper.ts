@@ -33,7 +33,7 @@ type Handler<P extends string, A extends Admission, Q, H, B> = (
 ) => Promise<Reply | Response> | Reply | Response
 
 /** As Next calls it. The declaration comes along for the test that walks all routes. */
-export type Route = ((request: Request, context: { params: Promise<object> }) => Promise<Response>) & {
+export type Route = ((request: Request, context: { params: Promise<object | undefined> }) => Promise<Response>) & {
   readonly declaration: Declaration
 }
 
@@ -61,10 +61,11 @@ export function read<P extends string, A extends Admission, Q extends z.ZodObjec
 
 function wrap(declaration: Declaration, handler: Handler<string, Admission, unknown, unknown, unknown>): Route {
   const { admission, method, query, headers, body } = declaration
-  const answer = async (request: Request, context: { params: Promise<object> }): Promise<Response> => {
+  const answer = async (request: Request, context: { params: Promise<object | undefined> }): Promise<Response> => {
     const services = publishedServices()
     if (!services) throw new Problem('not-ready')
-    const params: { id?: string } = await context.params
+    // Next resolves to nothing where the address has no parameters.
+    const params: { id?: string } = (await context.params) ?? {}
     const identity = await admit(services, request, admission, method !== 'GET', params.id)
     const call = {
       services,
@@ -77,7 +78,7 @@ function wrap(declaration: Declaration, handler: Handler<string, Admission, unkn
     }
     return toResponse(await handler(call as never), declaration.answer.status)
   }
-  const route = async (request: Request, context: { params: Promise<object> }) =>
+  const route = async (request: Request, context: { params: Promise<object | undefined> }) =>
     guarded(await answer(request, context).catch((error) => problemResponse(asProblem(error, declaration))))
   return Object.assign(route, { declaration })
 }
