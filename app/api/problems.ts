@@ -113,6 +113,11 @@ export const PROBLEMS = {
     title: 'The edit could not be stored',
     todo: 'Send it again with the same Idempotency-Key.',
   },
+  'budget-locked': {
+    status: 503,
+    title: 'The budget cannot be served',
+    todo: 'Tell the administrator; the list of budgets says what is wrong with it.',
+  },
   'not-ready': {
     status: 503,
     title: 'The server is not ready',

@@ -3,17 +3,19 @@ import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { type Access, openAccess } from '../../lib/access/open'
 import { openStore } from '../../lib/records/open'
-import type { Records } from '../../lib/records/types'
+import type { Records, Store } from '../../lib/records/types'
 
 export const OWNER = { name: 'Ines Owner', email: 'owner@example.com', password: 'nine tall green lamps' }
 
 export type World = {
+  directory: string
+  store: Store
   access: Access
   records: Records
   /** What was logged: nothing, unless a test says otherwise. */
   logged: string[]
   now(): number
-  /** Moves the clock of lib/access on; the account library keeps the machine's. */
+  /** Moves the clock of lib/access on, which stands still otherwise; the account library keeps the machine's. */
   advance(milliseconds: number): void
   close(): Promise<void>
 }
@@ -24,7 +26,8 @@ export async function openWorld(options: { publicUrl?: string } = {}): Promise<W
   const { records } = store
   const logged: string[] = []
   let ahead = 0
-  const now = () => Date.now() + ahead
+  const start = Date.now()
+  const now = () => start + ahead
   const access = await openAccess({
     records,
     publicUrl: options.publicUrl ?? 'http://127.0.0.1:3000',
@@ -33,6 +36,8 @@ export async function openWorld(options: { publicUrl?: string } = {}): Promise<W
     log: (message, error) => logged.push(`${message}: ${error}`),
   })
   return {
+    directory,
+    store,
     access,
     records,
     logged,

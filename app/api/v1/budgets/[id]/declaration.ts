@@ -12,4 +12,5 @@ export const readBudget = declare({
   headers: z.object({ 'if-none-match': z.string().optional() }),
   answer: { status: 200, description: 'The budget.', json: budgetState },
   also: [{ status: 304, description: 'No entry since.' }],
+  problems: ['budget-locked'],
 })

@@ -10,4 +10,5 @@ export const readEvaluation = declare({
   summary: 'What the budget comes to, as every screen and document shows it.',
   admission: { role: 'viewer' },
   answer: { status: 200, description: 'The evaluation.', json: z.strictObject({ seq, evaluation }) },
+  problems: ['budget-locked'],
 })

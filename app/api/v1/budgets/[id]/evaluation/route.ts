@@ -6,6 +6,6 @@ export const dynamic = 'force-dynamic'
 
 export const GET = read(readEvaluation, async ({ services, params }) => {
   const result = await services.budgets.evaluation(params.id)
-  if (!result) throw new Problem('not-found')
+  if (!result) throw new Problem('budget-locked')
   return { json: result }
 })

@@ -13,8 +13,10 @@ export const readTrail = declare({
   admission: { role: 'viewer' },
   query: z
     .strictObject({
-      after: place('Entries after this seq, oldest first: for programs that keep up.'),
-      before: place('Entries before this seq, newest first: for people that page back. Neither: the newest.'),
+      after: place('The whole chain after this seq, oldest first: for programs that keep up.'),
+      before: place(
+        'Edits before this seq, newest first and without the bindings of client ids: for people. Neither: the newest.',
+      ),
       limit: z.coerce
         .number('Give a whole number.')
         .int()
@@ -28,4 +30,5 @@ export const readTrail = declare({
       message: 'Give after or before, not both.',
     }),
   answer: { status: 200, description: 'Entries.', json: z.strictObject({ entries: z.array(trailEntry) }) },
+  problems: ['budget-locked'],
 })
