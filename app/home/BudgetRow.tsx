@@ -8,6 +8,7 @@ import { Landing } from '../diagram/Landing'
 import { VerdictMark } from '../marks/VerdictMark'
 import { headline, judgedWords } from '../words/judged'
 import css from './home.module.css'
+import { pastShares } from './pastShares'
 import { decidingAllowance } from './rank'
 
 type Props = {
@@ -79,6 +80,11 @@ function Deciding({
         </p>
         <p className={css.conditions}>{judgedWords(allowance, budget)}</p>
         <p className={css.conditions}>{sentence}</p>
+        {[...allowance.reasons, ...pastShares(allowance, budget)].slice(0, 3).map((reason) => (
+          <p key={reason} className={css.conditions}>
+            {reason}
+          </p>
+        ))}
         {others.map((one) => (
           <p key={one.id} className={css.conditions}>
             {one.name}: {one.words}

@@ -15,8 +15,10 @@ export default async function NewBudgetPage() {
   return (
     <Shell where="New budget" identity={identity}>
       <div className={form.sheet}>
-        <h1>New budget</h1>
-        <p>One budget is one direction of one link. You become its owner and can add the others on its page.</p>
+        <div className={form.part}>
+          <h1>New budget</h1>
+          <p>One budget is one direction of one link. You become its owner and can add the others on its page.</p>
+        </div>
         <div className={css.ways}>
           <section className={form.part} aria-labelledby="blank">
             <h2 id="blank">From nothing</h2>
