@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { moveIn } from '../../../app/budgets/[id]/client/rows/gridMoves'
+import { moveIn, nearestRow } from '../../../app/budgets/[id]/client/rows/gridMoves'
 
 // Keys as the ARIA authoring practices give them for a grid; Tab as common practice in worksheets, no source.
 const grid = [
@@ -37,4 +37,17 @@ describe('keys in the rows', () => {
     expect(go(1, 0, 'Tab', false, true)).toBeNull()
   })
   it('leaves every other key alone', () => expect(go(1, 1, 'q')).toBeNull())
+})
+
+describe('where the focus goes when its row is gone', () => {
+  it('to the next row, at the end to the one before', () => {
+    expect(nearestRow('b', ['a', 'b', 'c'], ['a', 'c'])).toBe('c')
+    expect(nearestRow('c', ['a', 'b', 'c'], ['a', 'b'])).toBe('b')
+    expect(nearestRow('b', ['a', 'b', 'c', 'd'], ['a', 'd'])).toBe('d')
+  })
+  it('stays where it is if only the cell is gone, and begins at the top if nothing is known', () => {
+    expect(nearestRow('b', ['a', 'b'], ['a', 'b'])).toBe('b')
+    expect(nearestRow('', [], ['a', 'b'])).toBe('a')
+    expect(nearestRow('b', ['b'], [])).toBeNull()
+  })
 })

@@ -8,12 +8,14 @@ import { Headlines } from './head/Headline'
 import { Proof } from './head/Proof'
 import { RefusedList } from './head/RefusedList'
 import { Signalling } from './head/Signalling'
+import { useOutOfSight } from './head/useOutOfSight'
 import { Picture } from './picture/Picture'
 import { useWas } from './picture/useWas'
 import { KeysHelp } from './rows/KeysHelp'
 import { OpenLine } from './rows/OpenLine'
 import { Rows } from './rows/Rows'
 import css from './sheet.module.css'
+import { formDraft } from './slips/FieldSlip'
 import { useBench, useReading, ViewContext } from './state/contexts'
 import { placeOf } from './state/focusPlace'
 import type { SheetState } from './state/sheet'
@@ -34,6 +36,7 @@ export function Sheet({ first, state, stand }: Props) {
   const { budget, evaluation } = useReading()
   const bench = useBench()
   const root = useRef<HTMLDivElement>(null)
+  const verdicts = useRef<HTMLDivElement>(null)
   const view = useViewState(first.budgetId, evaluation, root)
   const { trail, people } = state
   const was = useWas({ trail, people, budget, person: first.person, allowance: view.allowance })
@@ -49,8 +52,9 @@ export function Sheet({ first, state, stand }: Props) {
     const key = event.key.toLowerCase()
     if (!(event.ctrlKey || event.metaKey) || event.altKey || (key !== 'z' && key !== 'y')) return
     // While a value is being typed, the keys take back letters; after that, edits.
-    const typing = event.target instanceof Element && event.target.closest<HTMLElement>('[data-place]')
-    if (typing instanceof HTMLElement && bench.drafts.get(typing.dataset.place ?? '')) return
+    const typing = event.target instanceof Element ? event.target.closest<HTMLElement>('[data-place]') : null
+    const place = typing?.dataset.place ?? ''
+    if (bench.drafts.get(place) ?? bench.drafts.get(formDraft(place))) return
     event.preventDefault()
     if (key === 'y' || event.shiftKey) bench.redo()
     else bench.undo()
@@ -59,9 +63,9 @@ export function Sheet({ first, state, stand }: Props) {
   return (
     <ViewContext value={view}>
       <section ref={root} aria-label="Worksheet" className={css.sheet} onFocus={onFocus} onKeyDown={onKeyDown}>
-        <Head state={state} />
+        <Head state={state} glance={useOutOfSight(verdicts)} />
         <RefusedList refused={state.refused} />
-        <div className={css.verdicts}>
+        <div ref={verdicts} className={css.verdicts}>
           <Headlines />
           <Proof />
         </div>

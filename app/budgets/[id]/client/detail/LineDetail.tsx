@@ -6,10 +6,12 @@ import { KIND_WORD, OWNER_WORD } from '../../../../words/terms'
 import { FieldSlip } from '../slips/FieldSlip'
 import { fieldSlip, toleranceSlip } from '../slips/spec'
 import { useReading } from '../state/contexts'
+import { modelParameters } from '../typed/modelSlips'
 import { Covers } from './Covers'
 import css from './detail.module.css'
 import { FlagList } from './FlagList'
 import { Group } from './Group'
+import { Lanes } from './Lanes'
 import { lineGroups } from './lineGroups'
 import { RowDeeds } from './RowDeeds'
 
@@ -51,6 +53,7 @@ export function LineDetail({ id, line }: { id: string; line: Line }) {
           </div>
         </Group>
       ))}
+      <Lanes id={id} fields={modelParameters(line.model)} />
       <Covers id={id} line={line} />
       <Group title="Note">
         <FieldSlip spec={fieldSlip('lines', id, 'note', line.note)} hideLabel of={line.name ?? 'the line'} />

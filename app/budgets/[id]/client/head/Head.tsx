@@ -10,8 +10,8 @@ import { PeopleHere } from './PeopleHere'
 import { SavedState } from './SavedState'
 
 /** Stays in sight: the budget, its verdicts at one glance, what is saved, who is here. */
-export function Head({ state }: { state: SheetState }) {
-  const { budget, evaluation } = useReading()
+export function Head({ state, glance }: { state: SheetState; glance: boolean }) {
+  const { budget } = useReading()
   const { canWrite, undo, redo } = useBench()
   const name = budget.head.name ?? 'Budget without a name'
   return (
@@ -20,18 +20,7 @@ export function Head({ state }: { state: SheetState }) {
         <h1 className={css.unseen}>{name}</h1>
         <FieldSlip spec={fieldSlip('head', null, 'name', budget.head.name)} hideLabel of="the budget" />
       </div>
-      <ul aria-label="Verdicts" className={css.glance}>
-        {evaluation.allowances.map((allowance) => {
-          const { figure, unit } = headline(allowance)
-          return (
-            <li key={allowance.id} title={allowance.words}>
-              <VerdictMark verdict={allowance.verdict} size={14} />
-              <span className={`${css.glanceFigure} ${css[allowance.verdict]}`}>{figure}</span>
-              <span className={css.glanceUnit}>{unit}</span>
-            </li>
-          )
-        })}
-      </ul>
+      {glance && <Glance />}
       <SavedState state={state} />
       <PeopleHere people={state.people} />
       {canWrite && (
@@ -45,5 +34,24 @@ export function Head({ state }: { state: SheetState }) {
         </div>
       )}
     </header>
+  )
+}
+
+/** The verdicts at one glance, while the headlines are out of sight. */
+function Glance() {
+  const { evaluation } = useReading()
+  return (
+    <ul aria-label="Verdicts" className={css.glance}>
+      {evaluation.allowances.map((allowance) => {
+        const { figure, unit } = headline(allowance)
+        return (
+          <li key={allowance.id} title={allowance.words}>
+            <VerdictMark verdict={allowance.verdict} size={14} />
+            <span className={`${css.glanceFigure} ${css[allowance.verdict]}`}>{figure}</span>
+            <span className={css.glanceUnit}>{unit}</span>
+          </li>
+        )
+      })}
+    </ul>
   )
 }

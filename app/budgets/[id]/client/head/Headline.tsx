@@ -24,6 +24,8 @@ function Headline({ allowance }: { allowance: AllowanceEvaluation }) {
   const { budget } = useReading()
   const { figure, unit, sentence } = headline(allowance)
   const { verdict } = allowance
+  // The words name the first reasons themselves.
+  const reasons = allowance.reasons.filter((reason) => !allowance.words.includes(reason))
   return (
     <section className={css.headline} aria-label={allowance.name || 'Allowance without a name'}>
       <p className={css.margin}>
@@ -34,9 +36,9 @@ function Headline({ allowance }: { allowance: AllowanceEvaluation }) {
       <p className={css.strong}>{judgedWords(allowance, budget)}</p>
       <p className={css.quiet}>{[allowance.name, sentence, span(allowance, budget)].filter(Boolean).join(' · ')}</p>
       <p className={css.strong}>{allowance.words}</p>
-      {allowance.reasons.length > 0 && (
+      {reasons.length > 0 && (
         <ul className={css.reasons}>
-          {allowance.reasons.map((reason) => (
+          {reasons.map((reason) => (
             <li key={reason}>{reason}</li>
           ))}
         </ul>

@@ -1,5 +1,4 @@
 'use client'
-import type { AllowanceEvaluation } from '../../../../../lib/budget/evaluation'
 import { BasisStroke } from '../../../../marks/BasisStroke'
 import { TypicalWave } from '../../../../marks/TypicalWave'
 import { decibels } from '../../../../words/decibels'
@@ -32,26 +31,19 @@ export function Proof() {
             <TypicalWave />
             typical, not a maximum
           </dt>
-          <dd>
-            {sumWords(typical)}
-            {typical.map(({ id }) => (
+          {typical.map(({ id }) => (
+            <dd key={id}>
               <button
-                key={id}
                 type="button"
                 className={css.plainButton}
                 onClick={() => goTo({ section: 'lines', id, field: 'grade' })}
               >
                 {budget.lines[id]?.name ?? 'line without a name'}
               </button>
-            ))}
-          </dd>
+            </dd>
+          ))}
         </div>
       )}
     </dl>
   )
-}
-
-/** How many, not how much: decibels are added in one place only, and that is not here. */
-function sumWords(lines: AllowanceEvaluation['lines']): string {
-  return lines.length === 1 ? '1 line: ' : `${lines.length} lines: `
 }

@@ -47,10 +47,10 @@ export const LineRow = memo(
         <RowHead
           section="lines"
           id={id}
-          label={`line ${facts.number ?? ''} ${of}${state && `, ${state}`}`}
+          label={`line ${facts.number || ''} ${of}${state && `, ${state}`}`}
           onRemove={() => act(removeRow({ section: 'lines', id }))}
         >
-          {facts.number ?? '–'}
+          {facts.number || '–'}
         </RowHead>
         <div className={css.nameCell}>
           <GridCell spec={fieldSlip('lines', id, 'name', line.name)} of={of} look="text" className={css.name} />
@@ -58,11 +58,11 @@ export const LineRow = memo(
             {[assembly, line.kind ?? 'kind not said', state].filter(Boolean).join(' · ')}
           </span>
         </div>
-        <TypedCells id={id} line={line} of={of} />
+        <TypedCells id={id} line={line} of={of} lanes={facts.lanes} />
         <DbCell facts={facts} scaleDb={props.scaleDb} />
         <GridCell spec={toleranceSlip('lines', id, line)} of={of} look="slip" className={css.tolerance}>
           {line.toleranceMinus === null && line.tolerancePlus === null ? (
-            <span className={css.empty}>± none</span>
+            <span className={css.empty}>{facts.classTolerance ?? '± none'}</span>
           ) : undefined}
         </GridCell>
         <ClaimCells id={id} line={line} of={of} facts={facts} />

@@ -33,10 +33,12 @@ export const PlaneRow = memo(function PlaneRow({ id, plane, selected, says }: Pr
       >
         <span className={css.post} />
       </RowHead>
+      <GridCell spec={fieldSlip('planes', id, 'name', plane.name)} of={of} look="text" className={css.planeName}>
+        {plane.name || (plane.code ? wordOf(plane.code) : undefined)}
+      </GridCell>
       <GridCell spec={fieldSlip('planes', id, 'code', plane.code)} of={of} look="text" className={css.planeCode}>
         {plane.code ? wordOf(plane.code) : 'which plane?'}
       </GridCell>
-      <GridCell spec={fieldSlip('planes', id, 'name', plane.name)} of={of} look="text" className={css.planeName} />
       {says !== '' && <Cell className={css.planeSays}>{says}</Cell>}
     </Row>
   )

@@ -23,7 +23,7 @@ export function Rows() {
   const textureId = useId()
 
   const allowance = evaluation.allowances.find(({ id }) => id === view.allowance) ?? null
-  const facts = useMemo(() => lineFacts(evaluation, allowance), [evaluation, allowance])
+  const facts = useMemo(() => lineFacts(budget, evaluation, allowance), [budget, evaluation, allowance])
   const rows = shownRows(budget, (row) => bench.drafts.within(`${row.section}/${row.id}`))
   const textures = texturesOf(
     budget.assemblies,
@@ -57,6 +57,7 @@ export function Rows() {
         className={css.grid}
         onKeyDown={onKeyDown}
         onFocus={keys.onFocus}
+        onBlur={keys.onBlur}
       >
         <RowsHead />
         {rows.map((row) => {
@@ -89,12 +90,14 @@ export function Rows() {
 
 /** A row that was taken out while somebody typed in it is in no sum. */
 const NO_FACTS = {
-  number: null,
+  number: 0,
   db: null,
   outside: true,
   basis: null,
   grade: 'nominal',
   owner: null,
+  classTolerance: null,
+  lanes: '',
   problems: 0,
   flags: 0,
 } as const

@@ -9,8 +9,10 @@ import { wordOf } from '../words/choices'
 import { GridCell } from './GridCell'
 import css from './rows.module.css'
 
+type Props = { readonly id: string; readonly line: Line; readonly of: string; readonly lanes: string }
+
 /** The few values that the line's model is known by, each a slip: loss @ frequency, length × loss class, and so on. */
-export function TypedCells({ id, line, of }: { id: string; line: Line; of: string }) {
+export function TypedCells({ id, line, of, lanes }: Props) {
   return (
     <div className={css.typed}>
       {modelSlips(line).map(({ field, before }) => {
@@ -25,6 +27,7 @@ export function TypedCells({ id, line, of }: { id: string; line: Line; of: strin
             <GridCell spec={fieldSlip('lines', id, field, value)} of={of} look="slip">
               {typeof value === 'string' && value !== '' ? <Shown field={field} value={value} /> : undefined}
             </GridCell>
+            {laneCount(lanes, field) && <span className={css.lanes}>{`not for ${laneCount(lanes, field)} lanes`}</span>}
           </div>
         )
       })}
@@ -36,4 +39,11 @@ function Shown({ field, value }: { field: string; value: string }) {
   const meta = metaOf('lines', field)
   if (meta?.kind === 'reference') return <Reference section={meta.section as SectionName} id={value} />
   return meta?.kind === 'choice' ? wordOf(value) : <Typed text={value} />
+}
+
+/** How many lanes have a value of their own for this field, from 'length 16 skew 2'. */
+function laneCount(lanes: string, field: string): string | null {
+  const words = lanes.split(' ')
+  const at = words.indexOf(field)
+  return at < 0 ? null : (words[at + 1] ?? null)
 }

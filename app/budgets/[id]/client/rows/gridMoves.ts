@@ -47,3 +47,10 @@ function toRow(grid: Grid, at: Spot, row: number): Spot | null {
   const same = cells.indexOf(grid[at.row]?.[at.cell] ?? '')
   return { row, cell: same >= 0 ? same : Math.min(at.cell, cells.length - 1) }
 }
+
+/** The row to go to when one is gone: itself if it is still there, else the next of those after it, else before it. */
+export function nearestRow(gone: string, before: readonly string[], now: readonly string[]): string | null {
+  const at = before.indexOf(gone)
+  const near = [gone, ...before.slice(at + 1), ...before.slice(0, Math.max(at, 0)).reverse()]
+  return near.find((row) => now.includes(row)) ?? now[0] ?? null
+}

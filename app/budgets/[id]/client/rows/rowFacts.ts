@@ -1,12 +1,14 @@
 import type { AllowanceEvaluation, Evaluation, Flag } from '../../../../../lib/budget/evaluation'
-import type { Basis, Budget, Grade, Owner } from '../../../../../lib/budget/schema'
+import { type Basis, type Budget, type Grade, LANE_FIELDS, type Owner } from '../../../../../lib/budget/schema'
 import { plainDecibels } from '../../../../words/decibels'
 import { planeWords } from '../../../../words/terms'
+import { laneCounts } from '../detail/lanesOf'
+import { showTolerance } from '../typed/tolerance'
 
 /** What a row shows beside what is typed in it. Plain values, so that a row is drawn again only where one of them changed. */
 export type LineFacts = {
-  /** Its number between the planes of the allowance in view; null outside. */
-  readonly number: number | null
+  /** Its place among the lines, as in the level diagram: the same in whatever allowance is in view. */
+  readonly number: number
   /** What it adds to the sum at the allowance's frequency, in dB (an overlap: negative); outside, its loss at Nyquist. */
   readonly db: number | null
   readonly outside: boolean
@@ -14,15 +16,26 @@ export type LineFacts = {
   readonly basis: Basis | null
   readonly grade: Grade
   readonly owner: Owner | null
+  /** Its loss class's tolerance, where it has none of its own. */
+  readonly classTolerance: string | null
+  /** For how many lanes each of its slips does not speak: 'length 16 skew 2', or ''. */
+  readonly lanes: string
   readonly problems: number
   readonly flags: number
 }
 
 export function lineFacts(
+  budget: Budget,
   evaluation: Evaluation,
   allowance: AllowanceEvaluation | null,
 ): ReadonlyMap<string, LineFacts> {
-  const counted = new Map(allowance?.lines.map((line, index) => [line.id, { ...line, number: index + 1 }]))
+  const counted = new Map(allowance?.lines.map((line) => [line.id, line]))
+  const counts = laneCounts(budget)
+  const lanes = (line: string) =>
+    LANE_FIELDS.flatMap((field) => {
+      const count = counts.get(`${line}/${field}`)
+      return count === undefined ? [] : [`${field} ${count}`]
+    }).join(' ')
   const flags = flagsByRecord(evaluation.flags)
   const facts = new Map<string, LineFacts>()
   let position = 0
@@ -33,17 +46,27 @@ export function lineFacts(
     const line = evaluation.lines[row.line]
     const own = flags.get(`lines/${row.line}`) ?? []
     facts.set(row.line, {
-      number: inside ? inside.number : allowance?.from && allowance.to ? null : position,
+      number: position,
       db: inside ? inside.countedDb : (line?.loss.nominalDb ?? null),
       outside: !inside && Boolean(allowance?.from && allowance.to),
       basis: line?.basis ?? null,
       grade: line?.grade ?? 'nominal',
       owner: line?.owner ?? null,
+      classTolerance: classTolerance(budget, row.line),
+      lanes: lanes(row.line),
       problems: own.filter((flag) => flag.severity === 'problem').length,
       flags: own.length,
     })
   }
   return facts
+}
+
+function classTolerance(budget: Budget, id: string): string | null {
+  const line = budget.lines[id]
+  if (!line || line.model !== 'class' || line.lossClass === null) return null
+  const lossClass = budget.lossClasses[line.lossClass]
+  if (!lossClass || lossClass.removed || line.toleranceMinus !== null || line.tolerancePlus !== null) return null
+  return showTolerance({ minus: lossClass.toleranceMinus, plus: lossClass.tolerancePlus }) || null
 }
 
 /** Flags by 'section/id'. */

@@ -1,7 +1,7 @@
 'use client'
-import { type FocusEvent, type KeyboardEvent, type RefObject, useLayoutEffect } from 'react'
+import { type FocusEvent, type KeyboardEvent, type RefObject, useLayoutEffect, useRef } from 'react'
 import { useBench } from '../state/contexts'
-import { type Grid, moveIn } from './gridMoves'
+import { type Grid, moveIn, nearestRow } from './gridMoves'
 
 type Table = { readonly elements: readonly (readonly HTMLElement[])[]; readonly grid: Grid }
 
@@ -9,14 +9,21 @@ type Table = { readonly elements: readonly (readonly HTMLElement[])[]; readonly 
 export function useGridKeys(root: RefObject<HTMLElement | null>) {
   const { roving } = useBench()
 
+  const inside = useRef(false)
+  const order = useRef<readonly string[]>([])
+
   useLayoutEffect(() => {
     const known = roving.get()
-    const cells = [...(root.current?.querySelectorAll<HTMLElement>('[data-target]') ?? [])]
+    const cells = cellsOf(root.current)
+    const rows = [...new Set(cells.map((cell) => rowOf(cell.dataset.place)))]
     if (cells.length > 0 && !cells.some((cell) => cell.dataset.place === known)) {
-      const record = known?.slice(0, known.lastIndexOf('/') + 1)
-      const near = cells.find((cell) => record !== undefined && cell.dataset.place?.startsWith(record))
-      roving.set((near ?? cells[0])?.dataset.place ?? null)
+      const row = nearestRow(rowOf(known ?? undefined), order.current, rows)
+      const near = cells.find((cell) => rowOf(cell.dataset.place) === row) ?? cells[0]
+      roving.set(near?.dataset.place ?? null)
+      // The focused cell went with its row: the focus must not fall to the top of the page.
+      if (inside.current && document.activeElement === document.body) near?.focus()
     }
+    order.current = rows
   })
 
   const onKeyDown = (event: KeyboardEvent) => {
@@ -37,11 +44,20 @@ export function useGridKeys(root: RefObject<HTMLElement | null>) {
   }
 
   const onFocus = (event: FocusEvent) => {
+    inside.current = true
     const cell = event.target.closest<HTMLElement>('[data-target]')
     if (cell?.dataset.place) roving.set(cell.dataset.place)
   }
-  return { onKeyDown, onFocus }
+  const onBlur = () => {
+    inside.current = false
+  }
+  return { onKeyDown, onFocus, onBlur }
 }
+
+const cellsOf = (root: HTMLElement | null) => [...(root?.querySelectorAll<HTMLElement>('[data-target]') ?? [])]
+
+/** 'lines/id/' of a place. */
+const rowOf = (place: string | undefined) => place?.slice(0, place.lastIndexOf('/') + 1) ?? ''
 
 function tableOf(root: HTMLElement): Table {
   const elements = [...root.querySelectorAll<HTMLElement>('[data-row]')].map((row) =>

@@ -88,7 +88,10 @@ function Choice(props: Props) {
   const { budget } = useReading()
   const byKeys = useRef(false)
   const place = spec.places[0]
-  const section = place.section === 'laneValues' ? 'lines' : place.section
+  const [section, field] =
+    place.section === 'laneValues'
+      ? (['lines', place.field.split('/')[1] ?? ''] as const)
+      : ([place.section, place.field] as const)
   return (
     <select
       {...shared(props)}
@@ -106,7 +109,7 @@ function Choice(props: Props) {
       }}
       onBlur={() => slip.commit()}
     >
-      {optionsOf(budget, section, place.field, slip.text).map(({ value, label }) => (
+      {optionsOf(budget, section, field, slip.text).map(({ value, label }) => (
         <option key={value} value={value}>
           {label}
         </option>

@@ -17,10 +17,13 @@ type Props = {
   readonly of?: string
 }
 
+/** Name of the draft of a slip outside the rows. */
+export const formDraft = (key: string) => `${key}@form`
+
 /** A labelled slip outside the rows: always open, in a form or a table. */
 export function FieldSlip({ spec, hideLabel = false, of }: Props) {
   const id = useId()
-  const slip = useSlip(spec)
+  const slip = useSlip(spec, formDraft(spec.key))
   const place = spec.places[0]
   const meta = place.section === 'laneValues' ? null : metaOf(place.section, place.field)
   const aside = `${id}-aside`

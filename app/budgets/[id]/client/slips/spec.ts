@@ -1,4 +1,4 @@
-import type { Budget, Scalar, SectionName } from '../../../../../lib/budget/schema'
+import type { Budget, LANE_FIELDS, Scalar, SectionName } from '../../../../../lib/budget/schema'
 import type { Operation, Place } from '../../../../../lib/sheet/change'
 import { metaOf } from '../../../../../lib/sheet/layout'
 import { placeKey, valueAt } from '../../../../../lib/sheet/place'
@@ -72,6 +72,30 @@ export function toleranceSlip(
       return sides
         .filter(([place, value]) => (valueAt(budget, place) ?? null) !== value)
         .map(([place, value]) => setField(section, id, place.field, value))
+    },
+  }
+}
+
+/** The value of one lane for one field of a line; empty: the line's own. */
+export function laneSlip(
+  line: string,
+  lane: number,
+  field: (typeof LANE_FIELDS)[number],
+  value: string | null,
+): SlipSpec {
+  const place: Place = { section: 'laneValues', id: line, field: `${lane}/${field}` }
+  return {
+    key: placeKey(place),
+    places: [place],
+    label: labelOf('laneValues', place.field),
+    kind: field === 'lossClass' ? 'choice' : 'line',
+    text: value ?? '',
+    judge(typed, budget) {
+      const judged = judgeTyped('lines', field, typed)
+      if (isRefused(judged)) return judged
+      if (judged.value === (valueAt(budget, place) ?? null)) return []
+      if (typeof judged.value === 'number' || typeof judged.value === 'boolean') return { reason: 'Type a text here.' }
+      return [{ op: 'lane', line, lane, field, value: judged.value }]
     },
   }
 }

@@ -24,40 +24,43 @@ export type Slip = {
 
 const NOBODY: readonly Present[] = []
 
-/** One slip's life: typing, taking, refusing. Nothing is sent before it is taken. */
-export function useSlip(spec: SlipSpec): Slip {
+/**
+ * One slip's life: typing, taking, refusing. Nothing is sent before it is taken.
+ * @param key name of its draft: one field may be open in the rows and in the detail, and each keeps its own text
+ */
+export function useSlip(spec: SlipSpec, key: string = spec.key): Slip {
   const bench = useBench()
   const { drafts } = bench
-  const subscribe = useCallback((heard: () => void) => drafts.subscribe(spec.key, heard), [drafts, spec.key])
+  const subscribe = useCallback((heard: () => void) => drafts.subscribe(key, heard), [drafts, key])
   const draft = useSyncExternalStore(
     subscribe,
-    () => drafts.get(spec.key),
+    () => drafts.get(key),
     () => null,
   )
   const unsavedPlaces = useContext(UnsavedContext)
   const standing = useContext(OthersContext)
-  const keys = spec.places.map(placeKey)
-  const others = keys.flatMap((key) => standing.get(key) ?? NOBODY)
+  const places = spec.places.map(placeKey)
+  const others = places.flatMap((place) => standing.get(place) ?? NOBODY)
 
-  const restore = () => drafts.set(spec.key, null)
+  const restore = () => drafts.set(key, null)
   return {
     draft,
     text: draft?.text ?? spec.text,
     meanwhile: draft && draft.base !== spec.text && draft.text !== spec.text ? spec.text : null,
-    unsaved: keys.some((key) => unsavedPlaces.has(key)),
+    unsaved: places.some((place) => unsavedPlaces.has(place)),
     others,
     canWrite: bench.canWrite,
-    type: (text) => drafts.set(spec.key, { text, base: draft?.base ?? spec.text, reason: null }),
+    type: (text) => drafts.set(key, { text, base: draft?.base ?? spec.text, reason: null }),
     restore,
     commit: () => {
-      const typed = drafts.get(spec.key)
+      const typed = drafts.get(key)
       if (!typed) return true
       // What was opened and left as it was is no edit, even where another person has changed the value meanwhile.
       const untouched = typed.text === typed.base || typed.text === spec.text
       const outcome = untouched ? [] : spec.judge(typed.text, bench.read(), typed.base)
       const reason = 'reason' in outcome ? outcome.reason : outcome.length > 0 ? bench.edit(outcome) : null
       if (reason !== null) {
-        drafts.set(spec.key, { ...typed, reason })
+        drafts.set(key, { ...typed, reason })
         return false
       }
       restore()
