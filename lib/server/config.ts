@@ -21,7 +21,7 @@ const LOOPBACK = ['127.0.0.1', '::1', 'localhost']
  * @param root folder of the project, for the demo's own data directory
  * @throws ConfigError with a sentence that says what to set
  */
-export function readConfig(mode: string | undefined, environment: NodeJS.ProcessEnv, root: string): Config {
+export function readConfig(mode: string | undefined, environment: Readonly<Record<string, string | undefined>>, root: string): Config {
   if (mode !== 'demo' && mode !== 'serve' && mode !== 'dev')
     throw new ConfigError("Start with 'demo', 'serve' or 'dev'.")
   const host = environment.HALFBAUD_HOST ?? '127.0.0.1'
