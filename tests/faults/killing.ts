@@ -2,6 +2,7 @@ import { type ChildProcess, spawn } from 'node:child_process'
 import { mkdtemp, rm } from 'node:fs/promises'
 import { tmpdir } from 'node:os'
 import { join, resolve } from 'node:path'
+import { build } from 'esbuild'
 import { type Budget, budgetSchema } from '../../lib/budget/schema'
 import { verifyEntries } from '../../lib/records/journal/verify'
 import { openStore } from '../../lib/records/open'
@@ -11,12 +12,14 @@ import { freePort } from '../support/freePort'
 import { connectPeer, type Peer } from '../support/peer'
 
 const root = resolve(import.meta.dirname, '../..')
+const bundled = join(root, 'dist/tests/crashingServer.mjs')
 const LINES = 6
 
 type Person = { id: string; token: string }
 
 /** A data directory with one budget and two people who may write. */
 export async function prepare() {
+  await bundle()
   const directory = await mkdtemp(join(tmpdir(), 'halfbaud-kill-'))
   const port = await freePort()
   const environment = { HALFBAUD_DATA: directory, HALFBAUD_PORT: String(port), HALFBAUD_PAGES: 'off' }
@@ -56,6 +59,20 @@ export async function prepare() {
   }
 }
 
+/** As the real server is: one file, packages beside it. A process that compiles itself would take longer to start than to kill. */
+async function bundle() {
+  const entryPoints = [join(root, 'tests/faults/crashingServer.ts')]
+  await build({
+    entryPoints,
+    outfile: bundled,
+    bundle: true,
+    platform: 'node',
+    format: 'esm',
+    packages: 'external',
+    logLevel: 'warning',
+  })
+}
+
 export type Prepared = Awaited<ReturnType<typeof prepare>>
 
 function emptyBudget(): Budget {
@@ -73,7 +90,7 @@ export async function killOnce(
 ) {
   const crash =
     'atAppend' in how ? { CRASH_AT_APPEND: String(how.atAppend), CRASH_AFTER_US: String(how.afterMicroseconds) } : {}
-  const child = spawn(process.execPath, ['--import', 'tsx', join(root, 'tests/faults/crashingServer.ts')], {
+  const child = spawn(process.execPath, [bundled], {
     cwd: root,
     env: { ...process.env, ...prepared.environment, ...crash },
     stdio: ['ignore', 'pipe', 'inherit'],

@@ -28,7 +28,7 @@ function bootInFreshClone(tools: readonly string[]) {
     process.execPath,
     ['--preserve-symlinks', '--preserve-symlinks-main', join(clone, 'lib/server/boot.mjs'), 'start'],
     {
-      env: { PATH: path, HOME: '' },
+      env: { PATH: path, HOME: '', NODE_ENV: 'test' },
       encoding: 'utf8',
     },
   )
