@@ -38,7 +38,7 @@ export function evaluate(budget: Budget, _evidence: EvidenceData): Evaluation {
     engine: ENGINE,
     signalling: context.signalling.evaluation,
     rows: context.rows,
-    lines: lines.evaluations,
+    lines: Object.fromEntries(lines.evaluations),
     allowances,
     verdict: worstVerdict(allowances.map(({ verdict }) => verdict)),
     flags: flagsOf({ context, judged, lines: lines.evaluations }, lines.drafts),

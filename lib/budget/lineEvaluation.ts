@@ -7,7 +7,7 @@ import { LENGTH, typedValue } from './quantities'
 
 /** Every line at the Nyquist frequency in the reference corner, in the lane where it is worst. */
 export function lineEvaluations(context: Context): {
-  readonly evaluations: Record<string, LineEvaluation>
+  readonly evaluations: ReadonlyMap<string, LineEvaluation>
   readonly drafts: LineDraft[]
 } {
   const drafts: LineDraft[] = []
@@ -27,7 +27,7 @@ export function lineEvaluations(context: Context): {
       },
     ]
   })
-  return { evaluations: Object.fromEntries(evaluations), drafts }
+  return { evaluations: new Map(evaluations), drafts }
 }
 
 type InLane = { readonly item: LineItem; readonly lane: number | null; readonly loss: LineLoss | null }

@@ -1,4 +1,5 @@
 import type { Context } from '../context'
+import type { Conditions } from '../corner'
 import { distinctLanes, inLane } from '../lanes'
 import type { LineItem } from '../lineItem'
 import type { LineLoss } from '../lineLoss'
@@ -13,7 +14,7 @@ export type LaneSum = {
   readonly number: number
   readonly lines: readonly Counted[]
   readonly sum: Sum
-  /** Why the corner cannot be judged in this lane, as half a sentence. */
+  /** Why the corner cannot be judged in this lane, as half a sentence; the sum is then that of the reference corner. */
   readonly cornerUnknown: string | null
 }
 
@@ -29,15 +30,18 @@ export function laneSums(
   const named = conditions.problem === null ? allowance.judgedLane : null
   const numbers = named === null ? distinctLanes(context.lanes, span.items) : [named]
   const signs = span.items.map((item) => signOf(context, item, between))
-  return numbers.map((number) => {
-    const lines = span.items.map((own, index) => {
+  const inLanes = (number: number, corner: Conditions | null) =>
+    span.items.map((own, index): Counted => {
       const item = inLane(context.lanes, own, number)
       const sign = signs[index] ?? 'unnamed'
-      const given = atHz !== null && sign !== 'unnamed'
-      const loss = given ? context.losses.at(item, atHz, conditions.corner) : NO_NUMBER
-      return { item, sign: sign === 'unnamed' ? (-1 as const) : sign, loss }
+      if (sign === 'unnamed') return { item, sign: -1, loss: NO_NUMBER }
+      return { item, sign, loss: atHz === null ? NO_NUMBER : context.losses.at(item, atHz, corner) }
     })
-    return laneSum(number, lines)
+  return numbers.map((number) => {
+    const lines = inLanes(number, conditions.corner)
+    const cornerUnknown = lines.find(({ loss }) => loss.cornerUnknown !== null)?.loss.cornerUnknown ?? null
+    const shown = cornerUnknown === null ? lines : inLanes(number, null)
+    return { number, lines: shown, sum: sumOf(shown), cornerUnknown }
   })
 }
 
@@ -53,9 +57,4 @@ function signOf(context: Context, item: LineItem, between: ReadonlySet<string>):
   if (item.line.kind !== 'overlap') return 1
   const how = overlapIn(context, item, between)
   return how === 'subtracts' ? -1 : how === 'outside' ? 0 : 'unnamed'
-}
-
-function laneSum(number: number, lines: readonly Counted[]): LaneSum {
-  const blocking = lines.find(({ sign, loss }) => sign !== 0 && loss.cornerUnknown !== null)
-  return { number, lines, sum: sumOf(lines), cornerUnknown: blocking?.loss.cornerUnknown ?? null }
 }

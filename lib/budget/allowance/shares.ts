@@ -1,7 +1,7 @@
 import type { ShareUse } from '../evaluation'
 import { ownerOf } from '../lineItem'
 import { LOSS, typedValue } from '../quantities'
-import { inOrder } from '../record'
+import { inOrder, recordOf } from '../record'
 import type { Budget, RecordOf } from '../schema'
 import type { Counted } from './sum'
 
@@ -49,7 +49,8 @@ export function givenDb(budget: Budget, shares: readonly ShareUse[]): number {
   let disciplines = 0
   for (const { of, shareDb } of shares) {
     if (of.kind === 'discipline') disciplines += shareDb
-    else if (of.kind === 'assembly' || !assemblies.has(budget.lines[of.ref]?.assembly ?? '')) pieces += shareDb
+    else if (of.kind === 'assembly' || !assemblies.has(recordOf(budget, 'lines', of.ref)?.assembly ?? ''))
+      pieces += shareDb
   }
   return Math.max(pieces, disciplines)
 }

@@ -6,7 +6,7 @@ import type { FlagDraft } from '../flags'
 /** What a check looks at: the budget in order, its lines at Nyquist, its allowances judged. */
 export type Checked = {
   readonly context: Context
-  readonly lines: Readonly<Record<string, LineEvaluation>>
+  readonly lines: ReadonlyMap<string, LineEvaluation>
   readonly judged: readonly Judged[]
 }
 

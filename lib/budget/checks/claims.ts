@@ -11,7 +11,7 @@ const TYPICAL_MATTERS_DB = 0.5
 /** What lines claim about their numbers, and what does not go together. */
 export const claims: Check = function* ({ context, lines }) {
   for (const item of context.items) {
-    yield* grades(item, lines[item.id]?.loss.nominalDb ?? null)
+    yield* grades(item, lines.get(item.id)?.loss.nominalDb ?? null)
     yield* groups(item)
     yield* coverCodes(item)
     yield* fixtures(context.budget, item)

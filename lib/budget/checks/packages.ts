@@ -3,7 +3,7 @@ import type { Context } from '../context'
 import type { FlagDraft } from '../flags'
 import type { LineItem } from '../lineItem'
 import { LOSS, typedValue } from '../quantities'
-import { nameOf } from '../record'
+import { livingRecord, nameOf } from '../record'
 import type { PlaneCode } from '../schema'
 import type { Check } from './check'
 
@@ -26,7 +26,7 @@ function* againstPlanes(
   from: string,
   to: string,
 ): Generator<FlagDraft> {
-  const codeOf = (plane: string) => context.budget.planes[plane]?.code ?? null
+  const codeOf = (plane: string) => livingRecord(context.budget, 'planes', plane)?.code ?? null
   const ends = { from: codeOf(from), to: codeOf(to) }
   const name = nameOf('allowances', evaluation.id, evaluation)
   const found = span.items.filter(isPackage)

@@ -3,7 +3,7 @@ import { overlapIn } from '../allowance/overlap'
 import type { Context } from '../context'
 import type { FlagDraft } from '../flags'
 import type { LineItem } from '../lineItem'
-import { nameOf } from '../record'
+import { nameOf, recordOf } from '../record'
 import type { Check } from './check'
 
 /** Overlap and reserve lines. */
@@ -11,15 +11,15 @@ export const special: Check = function* ({ context, judged, lines }) {
   for (const item of context.items) {
     if (item.line.kind !== 'overlap') continue
     yield* overlaps(context, item, judged)
-    const own = lines[item.id]?.loss.nominalDb ?? null
+    const own = lines.get(item.id)?.loss.nominalDb ?? null
     for (const named of [item.line.overlapA, item.line.overlapB]) {
-      const whole = named === null ? null : (lines[named]?.loss.nominalDb ?? null)
+      const whole = named === null ? null : (lines.get(named)?.loss.nominalDb ?? null)
       if (own === null || whole === null || own <= whole) continue
       yield flag(
         item,
         'overlap-too-large',
         'loss',
-        `is larger than the line ${nameOf('lines', named, context.budget.lines[named ?? ''] ?? null)} that contains it.`,
+        `is larger than the line ${nameOf('lines', named, recordOf(context.budget, 'lines', named))} that contains it.`,
         'Correct the overlap, or name the right lines.',
       )
     }

@@ -35,9 +35,10 @@ function attenuation(input: ModelInput, fields: Findings<'lossClasses'>, length:
   if ('reason' in parsed) {
     return fields.say('unreadable-value', 'points', `${fields.name}: the points cannot be read.`, parsed.reason)
   }
-  const perLength = fields.may('lossPerLength', LOSS_PER_LENGTH)
-  const at = fields.may('at', FREQUENCY)
-  if (perLength === 'unreadable' || at === 'unreadable') return null
+  const stated = fields.record.lossPerLength !== null || fields.record.at !== null
+  const perLength = stated ? fields.need('lossPerLength', LOSS_PER_LENGTH) : null
+  const at = stated ? fields.need('at', FREQUENCY) : null
+  if (stated && (perLength === null || at === null)) return null
   const further = perLength !== null && at !== null ? [{ hz: at, value: perLength }] : []
   const points = [...parsed.points.filter((point) => point.hz !== at), ...further].sort((a, b) => a.hz - b.hz)
   return fromPoints(input, fields, points, length)
