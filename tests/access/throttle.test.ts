@@ -1,6 +1,12 @@
-import { expect, test } from 'vitest'
+import { afterAll, beforeAll, expect, test } from 'vitest'
 import { createThrottle } from '../../lib/access/throttle'
 import { from, OWNER, ownedWorld, signedIn } from './world'
+
+let world: Awaited<ReturnType<typeof ownedWorld>>
+beforeAll(async () => {
+  world = await ownedWorld()
+})
+afterAll(() => world.close())
 
 function clocked() {
   let now = 1_700_000_000_000
@@ -98,7 +104,6 @@ test('an hour after the last failure the count is forgotten', () => {
 })
 
 test('[W3.9] a thousand wrong sign-ins do not keep another person out, and a forged x-forwarded-for changes nothing', async () => {
-  const world = await ownedWorld()
   const added = await world.access.addPerson({ name: 'Ada', email: 'ada@example.com' })
   const answers = await Promise.all(
     Array.from({ length: 1000 }, (_, i) =>
@@ -114,14 +119,11 @@ test('[W3.9] a thousand wrong sign-ins do not keep another person out, and a for
   await signedIn(world.access, OWNER.email, OWNER.password, '192.0.2.9')
   await signedIn(world.access, 'ada@example.com', added?.password ?? '', '198.51.100.4')
   expect(world.logged).toEqual([])
-  await world.close()
 })
 
 test('guessing the current password in a stolen session is throttled too', async () => {
-  const world = await ownedWorld()
   const { identity, headers } = await signedIn(world.access, OWNER.email, OWNER.password)
   const guess = () => world.access.changePassword(identity, 'a wrong current one', 'quite another long one', headers)
   for (let i = 0; i < 5; i++) expect(await guess()).toBeNull()
   expect(await guess()).toEqual({ slow: 1 })
-  await world.close()
 })
