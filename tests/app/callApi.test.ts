@@ -1,4 +1,5 @@
 import { afterEach, describe, expect, it, vi } from 'vitest'
+import { beside } from '../../app/form/client/beside'
 import { callApi, problemOf } from '../../app/form/client/callApi'
 
 const answered = (status: number, headers: Record<string, string> = {}) => ({ status, headers: new Headers(headers) })
@@ -36,6 +37,17 @@ describe('a problem of the API in words', () => {
     for (const json of [null, 'Bad gateway', 7, [], { title: 3, errors: 'x', code: {} }]) {
       expect(problemOf(json, answered(502))).toMatchObject({ code: 'status-502', fields: {} })
     }
+  })
+})
+
+describe('a problem that concerns one field', () => {
+  const problem = { code: 'e-mail-taken', sentence: 'Somebody has it already.', fields: {} }
+
+  it('stands beside that field; others stay with the form', () => {
+    const placed = beside({ ok: false, problem }, { 'e-mail-taken': 'email' })
+    expect(placed).toMatchObject({ ok: false, problem: { fields: { email: 'Somebody has it already.' } } })
+    const other = { ok: false, problem: { ...problem, code: 'internal' } } as const
+    expect(beside(other, { 'e-mail-taken': 'email' })).toBe(other)
   })
 })
 

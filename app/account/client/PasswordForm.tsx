@@ -1,5 +1,6 @@
 'use client'
 import { useState } from 'react'
+import { beside } from '../../form/client/beside'
 import { callApi } from '../../form/client/callApi'
 import { Field } from '../../form/client/Field'
 import { Outcome } from '../../form/client/Outcome'
@@ -11,9 +12,10 @@ import form from '../../form/form.module.css'
 export function PasswordForm({ email }: { email: string }) {
   const [done, setDone] = useState<string | null>(null)
   const { busy, problem, onSubmit } = useSend(
-    ({ current, next }) => {
+    async ({ current, next }) => {
       setDone(null)
-      return callApi('POST', '/api/v1/password', { current, next })
+      const answer = await callApi('POST', '/api/v1/password', { current, next })
+      return beside(answer, { 'wrong-password': 'current', 'password-refused': 'next' })
     },
     (_, sent) => {
       sent.reset()

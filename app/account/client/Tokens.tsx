@@ -43,7 +43,7 @@ export function Tokens({ tokens: given }: { tokens: readonly Token[] }) {
                   <td>
                     <When time={token.createdAt} />
                   </td>
-                  <td>{token.expiresAt === null ? 'never' : <When time={token.expiresAt} />}</td>
+                  <td>{token.expiresAt === null ? 'never' : new Date(token.expiresAt).toISOString().slice(0, 10)}</td>
                   <td>{token.lastUsedAt === null ? 'not yet' : <When time={token.lastUsedAt} />}</td>
                   <td>
                     <button

@@ -1,4 +1,5 @@
 'use client'
+import { beside } from '../../form/client/beside'
 import { callApi } from '../../form/client/callApi'
 import { Field } from '../../form/client/Field'
 import { Outcome } from '../../form/client/Outcome'
@@ -12,7 +13,9 @@ export function OwnerForm() {
     async ({ code = '', name = '', email = '', password = '' }) => {
       const person = { code: code.trim(), name: name.trim(), email: email.trim(), password }
       const made = await callApi('POST', '/api/v1/owner', person)
-      return made.ok ? callApi('POST', '/api/v1/session', { email: person.email, password }) : made
+      return made.ok
+        ? callApi('POST', '/api/v1/session', { email: person.email, password })
+        : beside(made, { 'wrong-code': 'code', 'password-refused': 'password' })
     },
     () => window.location.assign('/'),
   )

@@ -1,6 +1,7 @@
 'use client'
 import { useRouter } from 'next/navigation'
 import { useState } from 'react'
+import { beside } from '../../form/client/beside'
 import { callApi } from '../../form/client/callApi'
 import { Field } from '../../form/client/Field'
 import { Once } from '../../form/client/Once'
@@ -15,7 +16,8 @@ export function PersonForm() {
   const router = useRouter()
   const [made, setMade] = useState<Made | null>(null)
   const { busy, problem, onSubmit } = useSend(
-    ({ name, email = '' }) => callApi('POST', '/api/v1/people', { name, email: email.trim() }),
+    async ({ name, email = '' }) =>
+      beside(await callApi('POST', '/api/v1/people', { name, email: email.trim() }), { 'e-mail-taken': 'email' }),
     (json, sent) => {
       const { person, password } = json as { person: { name: string }; password: string }
       setMade({ name: person.name, password })
