@@ -1,7 +1,6 @@
 'use client'
 import type { Line } from '../../../../../lib/budget/schema'
 import { DisciplineGlyph } from '../../../../marks/DisciplineGlyph'
-import { decibels, frequencyWords } from '../../../../words/decibels'
 import { KIND_WORD, OWNER_WORD } from '../../../../words/terms'
 import { FieldSlip } from '../slips/FieldSlip'
 import { fieldSlip, toleranceSlip } from '../slips/spec'
@@ -12,6 +11,7 @@ import css from './detail.module.css'
 import { FlagList } from './FlagList'
 import { Group } from './Group'
 import { Lanes } from './Lanes'
+import { LineFigure } from './LineFigure'
 import { lineGroups } from './lineGroups'
 import { RowDeeds } from './RowDeeds'
 
@@ -35,11 +35,7 @@ export function LineDetail({ id, line }: { id: string; line: Line }) {
             )}
           </p>
         </div>
-        <p className={css.figure}>
-          {decibelsOr(found?.loss.nominalDb)}
-          {found?.loss.nominalDb != null && <span className={css.unit}> dB</span>}
-          {found?.loss.atHz != null && <span className={css.at}>{frequencyWords(found.loss.atHz)}</span>}
-        </p>
+        <LineFigure id={id} />
       </div>
       {line.removed && <p className={css.gone}>This line is taken out of the budget.</p>}
       <FlagList section="lines" id={id} />
@@ -62,5 +58,3 @@ export function LineDetail({ id, line }: { id: string; line: Line }) {
     </>
   )
 }
-
-const decibelsOr = (db: number | null | undefined) => (db == null ? '?' : decibels(db))

@@ -27,10 +27,10 @@ export function TypedCells({ id, line, of, lanes }: Props) {
             <GridCell spec={fieldSlip('lines', id, field, value)} of={of} look="slip">
               {typeof value === 'string' && value !== '' ? <Shown field={field} value={value} /> : undefined}
             </GridCell>
-            {laneCount(lanes, field) && <span className={css.lanes}>{`not for ${laneCount(lanes, field)} lanes`}</span>}
           </div>
         )
       })}
+      {lanes !== '' && <span className={css.lanes}>{lanes}</span>}
     </div>
   )
 }
@@ -39,11 +39,4 @@ function Shown({ field, value }: { field: string; value: string }) {
   const meta = metaOf('lines', field)
   if (meta?.kind === 'reference') return <Reference section={meta.section as SectionName} id={value} />
   return meta?.kind === 'choice' ? wordOf(value) : <Typed text={value} />
-}
-
-/** How many lanes have a value of their own for this field, from 'length 16 skew 2'. */
-function laneCount(lanes: string, field: string): string | null {
-  const words = lanes.split(' ')
-  const at = words.indexOf(field)
-  return at < 0 ? null : (words[at + 1] ?? null)
 }

@@ -4,6 +4,7 @@ import { plainDecibels } from '../../../../words/decibels'
 import { planeWords } from '../../../../words/terms'
 import { laneCounts } from '../detail/lanesOf'
 import { showTolerance } from '../typed/tolerance'
+import { labelOf } from '../words/labels'
 
 /** What a row shows beside what is typed in it. Plain values, so that a row is drawn again only where one of them changed. */
 export type LineFacts = {
@@ -18,7 +19,7 @@ export type LineFacts = {
   readonly owner: Owner | null
   /** Its loss class's tolerance, where it has none of its own. */
   readonly classTolerance: string | null
-  /** For how many lanes each of its slips does not speak: 'length 16 skew 2', or ''. */
+  /** Which of its slips do not speak for all lanes, in words, or ''. */
   readonly lanes: string
   readonly problems: number
   readonly flags: number
@@ -34,8 +35,8 @@ export function lineFacts(
   const lanes = (line: string) =>
     LANE_FIELDS.flatMap((field) => {
       const count = counts.get(`${line}/${field}`)
-      return count === undefined ? [] : [`${field} ${count}`]
-    }).join(' ')
+      return count === undefined ? [] : [`own ${labelOf('lines', field)} in ${count} ${count === 1 ? 'lane' : 'lanes'}`]
+    }).join(', ')
   const flags = flagsByRecord(evaluation.flags)
   const facts = new Map<string, LineFacts>()
   let position = 0
@@ -63,7 +64,7 @@ export function lineFacts(
 
 function classTolerance(budget: Budget, id: string): string | null {
   const line = budget.lines[id]
-  if (!line || line.model !== 'class' || line.lossClass === null) return null
+  if (line?.model !== 'class' || line.lossClass === null) return null
   const lossClass = budget.lossClasses[line.lossClass]
   if (!lossClass || lossClass.removed || line.toleranceMinus !== null || line.tolerancePlus !== null) return null
   return showTolerance({ minus: lossClass.toleranceMinus, plus: lossClass.tolerancePlus }) || null

@@ -9,8 +9,8 @@ import {
   XAxis,
   YAxis,
 } from 'recharts'
-import { decibels } from '../../../../words/decibels'
-import type { Step } from './margins'
+import { plainDecibels } from '../../../../words/decibels'
+import { roundTicks, type Step } from './margins'
 
 type Props = {
   readonly steps: readonly Step[]
@@ -48,9 +48,9 @@ export default function MarginChart({ steps, requiredDb, read, onRead }: Props) 
           domain={[low - room, high + room]}
           width={44}
           tick={{ fill: 'var(--ink-3)', fontSize: 12 }}
-          tickFormatter={(value: number) => decibels(value, 1)}
+          tickFormatter={(value: number) => plainDecibels(value)}
           stroke="var(--rule-2)"
-          tickCount={4}
+          ticks={roundTicks(low - room, high + room)}
         />
         <Line
           dataKey="marginDb"

@@ -22,3 +22,14 @@ export function marginSteps(entries: readonly TrailEntry[], allowance: string): 
     return [{ seq, time, personName, marginDb: after.marginDb, verdict: after.verdict }]
   })
 }
+
+/** Against 0.3 / 0.1 < 3. */
+const ROUNDING = 1e-9
+
+/** At most five round numbers between two others, for an axis in dB. */
+export function roundTicks(low: number, high: number): readonly number[] {
+  const step = [0.1, 0.2, 0.5, 1, 2, 5, 10, 20, 50].find((each) => (high - low) / each <= 5) ?? 100
+  const first = Math.ceil(low / step - ROUNDING)
+  const count = Math.floor(high / step + ROUNDING) - first + 1
+  return Array.from({ length: Math.max(count, 0) }, (_, index) => Number(((first + index) * step).toFixed(1)))
+}
