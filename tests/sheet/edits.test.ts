@@ -77,6 +77,18 @@ describe('an edit', () => {
     expect(Y.encodeStateVector(doc)).toEqual(before)
   })
 
+  test('[W1.16] of several writes of one field the last one counts; a lane value that ends empty is not made', () => {
+    const doc = sampleDoc()
+    const edit = applyEdit(doc, [
+      setLoss('1 dB'),
+      { op: 'lane', line: 'trace', lane: 1, field: 'skew', value: '1 ps' },
+      setLoss('2 dB'),
+      { op: 'lane', line: 'trace', lane: 1, field: 'skew', value: null },
+    ])
+    expect(edit).toMatchObject({ ok: true, operations: [setLoss('2 dB')], bases: [null] })
+    expect(Object.keys(readBudget(doc).laneValues)).toEqual(['trace/2/length'])
+  })
+
   test('says which values it was made on', () => {
     const edit = applyEdit(sampleDoc(), [
       { op: 'set', section: 'lines', id: 'trace', field: 'length', value: '7 in' },

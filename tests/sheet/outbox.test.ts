@@ -27,6 +27,9 @@ function browserWith(kind: 'memory' | 'IndexedDB'): Browser {
   return browser
 }
 
+const LOSES = 1
+const WINS = 2 ** 32 - 1
+
 const lane = (index: number): Operation => ({
   op: 'lane',
   line: 'trace',
@@ -46,8 +49,10 @@ function seeded(seed: number) {
   }
 }
 
-function elsewhere(operation: Operation) {
+/** What somebody else does on the server's document. Of two writes at once the one of the larger client id wins. */
+function elsewhere(operation: Operation, clientId: number) {
   const other = docOf(Y.encodeStateAsUpdate(server.doc))
+  other.clientID = clientId
   const edit = applyEdit(other, [operation])
   if (!edit.ok || !edit.update) throw new Error('refused')
   server.editElsewhere(edit.update)
@@ -153,30 +158,36 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     expect(readBudget(server.doc).lines.trace?.length).toBe('7.25 in')
   })
 
-  test('[W10.3] what hangs on a refused edit, and what others changed meanwhile, is not done again but listed; dismissing ends it', async () => {
-    const browser = browserWith(kind)
-    const tab = await browser.openLive()
-    server.script = () => 'cut before'
-    tab.edit([{ op: 'add', section: 'lines', id: 'pad', values: { order: 'a3', name: 'Pad' } }])
-    tab.edit([setLoss('9 dB', 'pad')])
-    tab.edit([setLoss('0.4 dB'), { op: 'set', section: 'lines', id: 'via', field: 'stub', value: '0.1 mm' }])
-    elsewhere(setLoss('0.6 dB'))
-    server.script = ({ update }) =>
-      Buffer.from(update).includes('Pad') ? { code: 'invalid-result', reason: 'No more pads.' } : null
-    const now = await until(tab, (next) => next.unsaved === 0 && next.refused.length === 3)
-    expect(now.refused.map(({ code, reason, parts }) => [code, reason, parts.at(-1)?.typed])).toEqual([
-      ['invalid-result', 'No more pads.', 'Pad'],
-      ['conflict', 'The row that it belongs to is not in the budget.', '9 dB'],
-      ['conflict', "Somebody has changed this since; it reads '0.6 dB' now.", '0.4 dB'],
-    ])
-    expect(readBudget(server.doc).lines.via).toMatchObject({ loss: '0.6 dB', stub: '0.1 mm' })
-    for (const refused of now.refused) refused.dismiss()
-    expect(tab.getSnapshot().refused).toEqual([])
-    await tab.settled()
-    await tab.destroy()
-    const again = await browser.openLive()
-    expect(again.getSnapshot().refused).toEqual([])
-  })
+  test.each([
+    ['lost against the unsent one', LOSES],
+    ['won', WINS],
+  ])(
+    '[W10.3] what hangs on a refused edit, and what others changed meanwhile (their write %s), is not done again but listed',
+    async (_, clientId) => {
+      const browser = browserWith(kind)
+      const tab = await browser.openLive()
+      server.script = () => 'cut before'
+      tab.edit([{ op: 'add', section: 'lines', id: 'pad', values: { order: 'a3', name: 'Pad' } }])
+      tab.edit([setLoss('9 dB', 'pad')])
+      tab.edit([setLoss('0.4 dB'), { op: 'set', section: 'lines', id: 'via', field: 'stub', value: '0.1 mm' }])
+      elsewhere(setLoss('0.6 dB'), clientId)
+      server.script = ({ update }) =>
+        Buffer.from(update).includes('Pad') ? { code: 'invalid-result', reason: 'No more pads.' } : null
+      const now = await until(tab, (next) => next.unsaved === 0 && next.refused.length === 3)
+      expect(now.refused.map(({ code, reason, parts }) => [code, reason, parts.at(-1)?.typed])).toEqual([
+        ['invalid-result', 'No more pads.', 'Pad'],
+        ['conflict', 'The row that it belongs to is not in the budget.', '9 dB'],
+        ['conflict', "Somebody has changed this since; it reads '0.6 dB' now.", '0.4 dB'],
+      ])
+      expect(readBudget(server.doc).lines.via).toMatchObject({ loss: '0.6 dB', stub: '0.1 mm' })
+      for (const refused of now.refused) refused.dismiss()
+      expect(tab.getSnapshot().refused).toEqual([])
+      await tab.settled()
+      await tab.destroy()
+      const again = await browser.openLive()
+      expect(again.getSnapshot().refused).toEqual([])
+    },
+  )
 
   test('[W2.5] a new epoch: the copy is dropped, the edits are done again on what the server has now', async () => {
     const browser = browserWith(kind)
@@ -302,7 +313,7 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     await allSaved(tab)
     await tab.settled()
     await tab.destroy()
-    elsewhere(setLoss('2 dB', 'trace'))
+    elsewhere(setLoss('2 dB', 'trace'), LOSES)
     const again = await browser.open()
     const first = await until(again, (now) => now.budget !== null)
     expect(first.budget?.lines.via?.loss).toBe('1 dB')

@@ -1,6 +1,6 @@
 import { WebSocket } from 'ws'
 import type { Operation } from '../../lib/sheet/change'
-import { createMemory, type Storage } from '../../lib/sheet/outbox'
+import { type BrowserStorage, createMemory } from '../../lib/sheet/outbox'
 import { type Locks, openSheet, type SheetSession, type SheetSnapshot } from '../../lib/sheet/session'
 import type { FakeServer } from './fakeServer'
 
@@ -20,7 +20,7 @@ export class Browser {
 
   constructor(
     private readonly server: FakeServer,
-    private readonly storage: () => Storage | Promise<Storage> = () => this.memory.open(),
+    private readonly storage: () => BrowserStorage | Promise<BrowserStorage> = () => this.memory.open(),
   ) {}
 
   async open(): Promise<SheetSession> {

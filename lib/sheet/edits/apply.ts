@@ -1,7 +1,7 @@
 import * as Y from 'yjs'
 import type { Scalar, SectionName } from '../../budget/schema'
 import type { Operation, Place } from '../change'
-import { placeKey } from '../place'
+import { placeKey, placesOf } from '../place'
 import { recordMap } from '../seed'
 import { type EditRefusal, laneKey, refuseEdit } from './judge'
 import { mergedText, type NoteOperation, spliceBetween } from './noteText'
@@ -35,20 +35,19 @@ export function applyEdit(doc: Y.Doc, operations: readonly Operation[]): Applied
   const refusal = refuseEdit(doc, operations)
   if (refusal !== null) return { ok: false, ...refusal }
 
+  const last = lastWrites(operations)
   const done: { operation: Operation; base: Scalar }[] = []
-  const writes = new Map<string, FieldWrite>()
+  const writes: FieldWrite[] = []
   const update = captureUpdate(doc, () => {
     doc.transact(() => {
-      for (const operation of operations) make(doc, operation)
+      for (const operation of last) make(doc, operation)
     }, MADE)
     doc.transact(() => {
-      for (const operation of operations) {
+      for (const operation of last) {
         const write = writeField(doc, operation)
         if (write === null) continue
         done.push({ operation, base: operation.op === 'add' ? null : write.before })
-        const key = placeKey(write.place)
-        const earlier = writes.get(key)
-        writes.set(key, earlier ? { ...write, before: earlier.before } : write)
+        writes.push(write)
       }
     }, WRITTEN)
     doc.transact(() => {
@@ -64,8 +63,19 @@ export function applyEdit(doc: Y.Doc, operations: readonly Operation[]): Applied
     update,
     operations: done.map((each) => each.operation),
     bases: done.map((each) => each.base),
-    writes: [...writes.values()],
+    writes,
   }
+}
+
+/** Without the writes of a field that a later write in the same edit replaces: only the last one is ever seen. */
+function lastWrites(operations: readonly Operation[]): Operation[] {
+  const later = new Set<string>()
+  const kept = operations.toReversed().filter((operation) => {
+    if (operation.op !== 'set' && operation.op !== 'lane') return true
+    const key = placesOf(operation).map(placeKey).join()
+    return !later.has(key) && later.add(key)
+  })
+  return kept.reverse()
 }
 
 /** Runs changes of the document and returns them as one update, or null if there were none. */

@@ -1,6 +1,6 @@
 import { type DBSchema, type IDBPDatabase, type IDBPTransaction, openDB } from 'idb'
 import { FIRST_META, type Meta, type OutboxRecord, type RefusedRecord } from './record'
-import { type Batch, reduce, type Storage } from './storage'
+import { type Batch, type BrowserStorage, reduce } from './storage'
 
 interface Schema extends DBSchema {
   records: { key: number; value: OutboxRecord; indexes: { editId: string } }
@@ -16,7 +16,7 @@ const VERSION = 1
  * something has changed, never what: the data goes through the database.
  * @throws DOMException where the browser offers no IndexedDB (some private windows)
  */
-export async function openIndexedDb(person: string, budget: string): Promise<Storage> {
+export async function openIndexedDb(person: string, budget: string): Promise<BrowserStorage> {
   const name = `halfbaud/${person}/${budget}`
   const db = await openDB<Schema>(name, VERSION, {
     upgrade(database) {

@@ -1,8 +1,8 @@
 import { FIRST_META } from './record'
-import { type Batch, reduce, type Storage, type Stored } from './storage'
+import { type Batch, type BrowserStorage, reduce, type Stored } from './storage'
 
 /** A storage that lasts as long as this object: for a browser that keeps nothing, and for tests. Each handle is a tab. */
-export function createMemory(): { open(): Storage } {
+export function createMemory(): { open(): BrowserStorage } {
   let stored: Stored = { meta: FIRST_META, records: [], refused: [] }
   let cache: { key: number; update: Uint8Array }[] = []
   let nextKey = 1

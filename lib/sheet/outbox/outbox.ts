@@ -1,5 +1,5 @@
 import { FIRST_META, type Meta, type OutboxRecord, type RefusedRecord } from './record'
-import { type Batch, reduce, type Storage, type Stored } from './storage'
+import { type Batch, type BrowserStorage, reduce, type Stored } from './storage'
 
 /**
  * The stored edits as one tab sees them: its own batches at once, those of other tabs when they tell. Batches are stored
@@ -7,14 +7,16 @@ import { type Batch, reduce, type Storage, type Stored } from './storage'
  */
 export class Outbox {
   private stored: Stored = { meta: FIRST_META, records: [], refused: [] }
-  private waiting = 0
+  private writing = 0
+  /** Another tab has written while own batches were on their way. */
+  private unread = false
   private last: Promise<void> = Promise.resolve()
   private readonly unwatch: () => void
   /** Why the browser could not keep something, in words; null while all is well. */
   fault: string | null = null
 
   constructor(
-    private readonly storage: Storage,
+    private readonly storage: BrowserStorage,
     private readonly changed: () => void,
   ) {
     this.unwatch = storage.watch(() => void this.look())
@@ -31,12 +33,15 @@ export class Outbox {
     return this.stored.refused
   }
 
-  /** Reads what is stored, unless own batches are still on their way: then it is read after the last of them. */
+  /** Reads what is stored; while own batches are on their way, after the last of them, so that none seems undone. */
   async look(): Promise<void> {
     await this.enqueue(async () => {
-      const stored = await this.storage.read()
-      // A batch that came meanwhile is not in what was read.
-      if (this.waiting > 1) return
+      const stored = this.writing > 0 ? null : await this.storage.read()
+      if (stored === null || this.writing > 0) {
+        this.unread = true
+        return
+      }
+      this.unread = false
       this.stored = stored
       this.changed()
     })
@@ -47,8 +52,14 @@ export class Outbox {
     const next = reduce(this.stored, batch)
     if (next === null) return
     this.stored = next
+    this.writing++
     void this.enqueue(async () => {
-      if (!(await this.storage.write(batch))) void this.look()
+      try {
+        if (!(await this.storage.write(batch))) this.unread = true
+      } finally {
+        this.writing--
+      }
+      if (this.unread && this.writing === 0) void this.look()
     })
     this.changed()
   }
@@ -65,15 +76,10 @@ export class Outbox {
   }
 
   private enqueue(job: () => Promise<void>): Promise<void> {
-    this.waiting++
-    this.last = this.last.then(job).then(
-      () => void this.waiting--,
-      (error: unknown) => {
-        this.waiting--
-        this.fault = `This browser could not keep a change: ${error instanceof Error ? error.message : String(error)}`
-        this.changed()
-      },
-    )
+    this.last = this.last.then(job).catch((error: unknown) => {
+      this.fault = `This browser could not keep a change: ${error instanceof Error ? error.message : String(error)}`
+      this.changed()
+    })
     return this.last
   }
 }

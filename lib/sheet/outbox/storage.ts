@@ -28,7 +28,7 @@ export type Batch = {
  * All tabs share it. The cache never holds an edit that is neither acknowledged nor in the outbox, because both leave and
  * enter in one transaction: so there is no edit that only this browser sees and nobody sends.
  */
-export interface Storage {
+export interface BrowserStorage {
   /** False where nothing outlives the page. */
   readonly durable: boolean
   read(): Promise<Stored>

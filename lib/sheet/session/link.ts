@@ -1,5 +1,6 @@
-import type * as decoding from 'lib0/decoding'
-import { WebsocketProvider } from 'y-websocket'
+import * as decoding from 'lib0/decoding'
+import { messageYjsSyncStep1 } from 'y-protocols/sync'
+import { messageSync, WebsocketProvider } from 'y-websocket'
 import type * as Y from 'yjs'
 import { shouldReconnect } from '../closeCodes'
 import {
@@ -23,6 +24,8 @@ export type LinkEvents = {
   welcome(welcome: Welcome): void
   /** The document holds what the server has. */
   synced(): void
+  /** An update as the server sent it, that brought something new. */
+  received(update: Uint8Array): void
   acknowledged(message: Acknowledged): void
   refused(message: Refused): void
   presence(people: Present[]): void
@@ -67,6 +70,19 @@ export function openLink(options: SheetOptions, doc: Y.Doc, events: LinkEvents):
   on<Present[]>(MESSAGE.presence, (header) => events.presence(header))
   on<TrailEntry[]>(MESSAGE.trail, (header) => events.trail(header))
 
+  // What the document tells of an update is not what the server sent: a value that lost against an unsent edit is empty there.
+  let changed = false
+  doc.on('update', (_update: Uint8Array, origin: unknown) => {
+    if (origin === provider) changed = true
+  })
+  const receive = provider.messageHandlers[messageSync]
+  provider.messageHandlers[messageSync] = (encoder, decoder, ...rest) => {
+    const update = readUpdate(decoding.clone(decoder))
+    changed = false
+    receive?.(encoder, decoder, ...rest)
+    if (open && changed && update !== null) events.received(update)
+  }
+
   provider.on('status', ({ status }) => {
     if (open && status === 'connected') events.opened()
   })
@@ -94,4 +110,8 @@ export function openLink(options: SheetOptions, doc: Y.Doc, events: LinkEvents):
       provider.destroy()
     },
   }
+}
+
+function readUpdate(decoder: decoding.Decoder): Uint8Array | null {
+  return decoding.readVarUint(decoder) === messageYjsSyncStep1 ? null : decoding.readVarUint8Array(decoder)
 }

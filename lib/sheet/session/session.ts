@@ -2,7 +2,6 @@ import * as Y from 'yjs'
 import { SCHEMA_VERSION } from '../../budget/schema'
 import { CLOSE } from '../closeCodes'
 import { type Batch, Outbox, type OutboxRecord } from '../outbox'
-import { placeKey, placesOf } from '../place'
 import { MESSAGE, type Welcome } from '../wire'
 import { createCellSender } from './cell'
 import { CONNECTING, closed, LIVE, offline } from './connectionWords'
@@ -12,6 +11,7 @@ import { type Link, type LinkEvents, openLink } from './link'
 import { refusedEdits } from './refusedEdits'
 import { NEW_EPOCH, Sender } from './sender'
 import { ACKNOWLEDGED, closeDocument, isLoaded, openDocument, type SheetDocument } from './sheetDocument'
+import { firstSnapshot, unsavedOf } from './snapshot'
 import { createStore } from './store'
 import { addToTrail } from './trail'
 import type { SheetOptions, SheetSession, SheetSnapshot } from './types'
@@ -30,22 +30,7 @@ type Open = SheetDocument & {
  */
 export function openSheet(options: SheetOptions): SheetSession {
   const now = options.now ?? Date.now
-  const store = createStore<SheetSnapshot>({
-    generation: 0,
-    budget: null,
-    connection: CONNECTING,
-    role: null,
-    unsaved: 0,
-    unsavedPlaces: new Set(),
-    refused: [],
-    people: [],
-    trail: options.trail ?? [],
-    lastAcknowledged: null,
-    canUndo: false,
-    canRedo: false,
-    durable: options.storage.durable,
-    fault: null,
-  })
+  const store = createStore<SheetSnapshot>(firstSnapshot(options))
   let open: Open | null = null
   /** The generation that is open or being opened. */
   let target: number | null = null
@@ -124,9 +109,6 @@ export function openSheet(options: SheetOptions): SheetSession {
     const { doc } = document
     const link = openLink(options, doc, eventsOf(generation))
     open = { ...document, generation, link, welcomed: false, synced: false }
-    doc.on('update', (update: Uint8Array, origin: unknown) => {
-      if (origin === link.provider && sender.active) outbox.commit({ ifGeneration: generation, updates: [update] })
-    })
     doc.on('afterAllTransactions', publish)
     publish()
     doStaleAgain()
@@ -195,6 +177,9 @@ export function openSheet(options: SheetOptions): SheetSession {
           current.synced = true
           live()
         }),
+      received(update) {
+        if (sender.active) outbox.commit({ ifGeneration: generation, updates: [update] })
+      },
       acknowledged: (message) => sender.acknowledged(message),
       refused: (message) => sender.refused(message),
       presence: (people) => store.patch({ people }),
@@ -260,9 +245,4 @@ export function openSheet(options: SheetOptions): SheetSession {
       await outbox.close()
     },
   }
-}
-
-function unsavedOf(records: readonly OutboxRecord[]) {
-  const places = records.flatMap((record) => record.deed.operations.flatMap(placesOf))
-  return { unsaved: records.length, unsavedPlaces: new Set(places.map(placeKey)) }
 }

@@ -1,6 +1,6 @@
 import * as Y from 'yjs'
 import { createMirror, type Mirror } from '../mirror'
-import type { OutboxRecord, Storage } from '../outbox'
+import type { BrowserStorage, OutboxRecord } from '../outbox'
 import { createDoc } from '../seed'
 import { createUndo, type Undo } from '../undo'
 
@@ -15,7 +15,10 @@ const MANY_UPDATES = 200
 export type SheetDocument = { readonly doc: Y.Doc; readonly mirror: Mirror; readonly undo: Undo }
 
 /** Makes a document of the cache and of the unsent edits that were made in it. */
-export async function openDocument(storage: Storage, unsent: () => readonly OutboxRecord[]): Promise<SheetDocument> {
+export async function openDocument(
+  storage: BrowserStorage,
+  unsent: () => readonly OutboxRecord[],
+): Promise<SheetDocument> {
   // Without the cache everything comes from the server again.
   const { updates, through } = await storage.updates().catch(() => ({ updates: [], through: 0 }))
   const doc = createDoc()

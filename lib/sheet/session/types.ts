@@ -1,6 +1,6 @@
 import type { Budget } from '../../budget/schema'
 import type { Operation, Place } from '../change'
-import type { Storage } from '../outbox'
+import type { BrowserStorage } from '../outbox'
 import type { Cell, Present, RefusalCode, Role, TrailEntry } from '../wire'
 import type { Locks } from './locks'
 
@@ -12,7 +12,7 @@ export type SheetOptions = {
   /** Address of the socket without the budget, such as 'wss://example.org/sheet'. */
   readonly url: string
   readonly params?: Readonly<Record<string, string>>
-  readonly storage: Storage
+  readonly storage: BrowserStorage
   readonly locks: Locks
   /** For Node, which has no WebSocket of its own. */
   readonly WebSocketPolyfill?: typeof WebSocket
