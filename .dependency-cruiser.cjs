@@ -65,7 +65,7 @@ module.exports = {
         pathNot: [
           '^lib/records/generated/',
           '\\.d\\.ts$',
-          '(^|/)(page|layout|route|not-found|error|icon)\\.tsx?$',
+          '(^|/)(page|layout|route|not-found|error|global-error|icon)\\.tsx?$',
           '\\.css$',
           '^lib/server/boot\\.mjs$',
         ],

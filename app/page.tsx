@@ -23,16 +23,18 @@ export default async function BudgetsPage() {
     <Shell where={null} identity={identity}>
       <div className={css.top}>
         <h1>{counted(summaries.length, 'budget', 'budgets')}</h1>
-        <ul className={css.counts}>
-          {VERDICTS.map((verdict) => {
-            const count = summaries.filter((one) => one.locked === null && one.verdict === verdict).length
-            return count === 0 ? null : (
-              <li key={verdict}>
-                <VerdictMark verdict={verdict} word={`${count} ${VERDICT_WORD[verdict].toLowerCase()}`} />
-              </li>
-            )
-          })}
-        </ul>
+        {summaries.length > 0 && (
+          <ul className={css.counts}>
+            {VERDICTS.map((verdict) => {
+              const count = summaries.filter((one) => one.locked === null && one.verdict === verdict).length
+              return count === 0 ? null : (
+                <li key={verdict}>
+                  <VerdictMark verdict={verdict} word={`${count} ${VERDICT_WORD[verdict].toLowerCase()}`} />
+                </li>
+              )
+            })}
+          </ul>
+        )}
         {summaries.length > 1 && (
           <p className={css.aside}>The ones that need work come first. Each margin is at its own judged conditions.</p>
         )}

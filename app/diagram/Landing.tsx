@@ -85,7 +85,7 @@ export function LandingDrawing({
       )}
       {words && <Below text={geometry.belowWords} width={width} y={height - 8} />}
       {geometry.was && (
-        <g className={css[`p-${personColour(was?.colour ?? 0)}`]}>
+        <g key={was?.words} className={`${css.leaving} ${css[`p-${personColour(was?.colour ?? 0)}`]}`}>
           <path d={`M${px(geometry.was.x - 22)} ${px(geometry.was.y)}h68`} className={css.was} />
           {words && (
             <text x={px(geometry.was.x + 50)} y={px(geometry.was.wordsY)} className={css.wasWords}>

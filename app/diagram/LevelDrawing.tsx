@@ -1,3 +1,4 @@
+import type { CSSProperties, ReactNode } from 'react'
 import type { Evaluation } from '../../lib/budget/evaluation'
 import { StrokePath } from '../marks/BasisStroke'
 import { PennantShape, personColour } from '../marks/Pennant'
@@ -36,7 +37,7 @@ export function LevelDrawing({ id, geometry, evaluation, allowance, was }: Props
         <path key={one.id} d={pathOf(one.points)} className={css.companion} />
       ))}
       {geometry.was && (
-        <g className={css[`p-${personColour(was?.colour ?? 0)}`]}>
+        <g key={was?.words} className={`${css.leaving} ${css[`p-${personColour(was?.colour ?? 0)}`]}`}>
           <path d={pathOf(geometry.was.points)} className={css.was} />
           {geometry.was.wordsAt && <Words lines={geometry.was.words} at={geometry.was.wordsAt} />}
         </g>
@@ -54,7 +55,9 @@ export function LevelDrawing({ id, geometry, evaluation, allowance, was }: Props
         </g>
       ))}
       {pieces.map((piece) => (
-        <Stretch key={piece.id} piece={piece} />
+        <Moved key={`${piece.id} ${was?.marginDb}`} from={geometry.was?.before.get(piece.id)}>
+          <Stretch piece={piece} />
+        </Moved>
       ))}
       <Staffs geometry={geometry} />
       {joints.map(({ x, y }, at) => (
@@ -91,6 +94,16 @@ function Stretch({ piece }: { piece: Piece }) {
   if (piece.place !== 'inside') return <path d={d} className={css.outside} />
   return (
     <StrokePath basis={piece.basis} d={d} length={Math.hypot(piece.to.x - piece.from.x, piece.to.y - piece.from.y)} />
+  )
+}
+
+/** After another person's change the level settles from where it was; own edits leave no trace and do not move. */
+function Moved({ from, children }: { from: string | undefined; children: ReactNode }) {
+  if (from === undefined) return children
+  return (
+    <g className={css.settling} style={{ '--before': from } as CSSProperties}>
+      {children}
+    </g>
   )
 }
 

@@ -77,6 +77,8 @@ export type WasLevel = {
   readonly points: readonly Point[]
   readonly words: readonly string[]
   readonly wordsAt: Point | null
+  /** By line: the CSS transform that puts its stretch of the level back where it was. */
+  readonly before: ReadonlyMap<string, string>
 }
 
 export type LevelGeometry = {

@@ -1,5 +1,6 @@
 import type { AllowanceEvaluation } from '../../lib/budget/evaluation'
 import type { Box, Flag, Piece, Point, WasLevel } from './geometry'
+import { px } from './path'
 import { along, lowestLevel } from './pieces'
 import { workWidth } from './text'
 import type { Was } from './was'
@@ -18,7 +19,19 @@ export function wasLevelOf(
   if (!was || !changed || allowance === null || allowance.marginDb === null) return null
   const lower = (allowance.marginDb - was.marginDb) * room.scale
   const points = [changed.from, ...pieces.slice(at).map(({ to }) => ({ x: to.x, y: to.y + lower }))]
-  return { points, words: was.words.split('\n'), wordsAt: room.narrow ? null : wordsAt(was, changed, pieces, room) }
+  return {
+    points,
+    words: was.words.split('\n'),
+    wordsAt: room.narrow ? null : wordsAt(was, changed, pieces, room),
+    before: new Map(pieces.slice(at).map((piece) => [piece.id, before(piece, piece === changed, lower)])),
+  }
+}
+
+/** The changed line turns about its beginning, the ones behind it move as they are. */
+function before({ from, to }: Piece, changed: boolean, lower: number): string {
+  const drop = to.y - from.y
+  if (!changed || Math.abs(drop) < 0.5) return `translateY(${px(lower)}px)`
+  return `translateY(${px(from.y)}px) scaleY(${((drop + lower) / drop).toFixed(3)}) translateY(${px(-from.y)}px)`
 }
 
 function wordsAt(

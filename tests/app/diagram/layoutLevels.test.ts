@@ -272,6 +272,8 @@ describe('people', () => {
     const geometry = layoutLevels(tamarack.evaluation, tamarack.budget, 'room', WIDE, state)
     const last = geometry.was?.points[geometry.was.points.length - 1]
     expect(((last?.y ?? 0) - geometry.end.y) / geometry.scale).toBeCloseTo(0.46, 9)
+    expect([...(geometry.was?.before.keys() ?? [])]).toEqual(['l7', 'l8', 'l9', 'l10', 'l11', 'l12', 'l13'])
+    expect(geometry.was?.before.get('l8')).toBe(`translateY(${Math.round(0.46 * geometry.scale * 10) / 10}px)`)
   })
 })
 
