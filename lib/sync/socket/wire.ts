@@ -45,6 +45,8 @@ export class Wire {
   close({ code, words }: CloseReason): void {
     if (this.isClosing) return
     this.isClosing = true
+    // A socket that is held up would not read the other end's goodbye.
+    this.socket.resume()
     this.socket.close(code, words)
     // The close frame stands behind what is unsent, which may never go.
     this.timers.after(GOODBYE, () => this.socket.terminate())
