@@ -1,7 +1,7 @@
 import type { z } from 'zod'
 import { crossCheck } from './crossCheck'
 import { fieldWords, nameOf } from './record'
-import { type Budget, budgetSchema, SCHEMA_VERSION, SECTIONS, type SectionName } from './schema'
+import { type Budget, budgetSchema, LANE_KEY, SCHEMA_VERSION, SECTIONS, type SectionName } from './schema'
 
 export type BudgetIssue = {
   /** Where it is, such as 'lines.l3.loss'; '' is the whole file. */
@@ -43,25 +43,34 @@ function versionIssue(json: unknown): BudgetIssue | null {
 }
 
 function worded(issue: z.core.$ZodIssue, json: unknown): BudgetIssue {
-  const [section, second, third] = issue.path.map(String)
-  const path = issue.path.join('.')
-  const what = issue.code === 'unrecognized_keys' ? unknownFields(issue.keys) : issue.message
-  if (section === undefined) return { path, message: what }
-  if (section === 'head') {
-    return {
-      path,
-      message: second === undefined ? `The head: ${what}` : `The link, ${fieldWords('head', second)}: ${what}`,
-    }
-  }
-  if (section === 'laneValues')
-    return { path, message: second === undefined ? what : `Lane value '${second}': ${what}` }
-  if (!Object.hasOwn(SECTIONS, section) || second === undefined) return { path, message: `'${section}': ${what}` }
-  const name = nameOf(section as SectionName, second, recordIn(json, section, second))
-  const of = `${capital(name)} (${section}.${second})`
-  return {
-    path,
-    message: third === undefined ? `${of}: ${what}` : `${of}, ${fieldWords(section as SectionName, third)}: ${what}`,
-  }
+  const path = issue.path.map(String)
+  return { path: path.join('.'), message: [subjectOf(path, json), whatToDo(issue, path)].filter(Boolean).join(': ') }
+}
+
+/** The record by its name and the field by what it is. */
+function subjectOf([section, second, third]: readonly string[], json: unknown): string {
+  if (section === undefined) return ''
+  if (section === 'head') return second === undefined ? 'The head' : `The link, ${fieldWords('head', second)}`
+  if (section === 'laneValues') return second === undefined ? `'${section}'` : laneSubject(second, json)
+  if (!Object.hasOwn(SECTIONS, section) || second === undefined) return `'${section}'`
+  const known = section as SectionName
+  const record = `${capital(nameOf(known, second, recordIn(json, section, second)))} (${section}.${second})`
+  return third === undefined ? record : `${record}, ${fieldWords(known, third)}`
+}
+
+function laneSubject(key: string, json: unknown): string {
+  const [, line, lane, field] = LANE_KEY.exec(key) ?? []
+  if (!line || !field) return `Lane value '${key}'`
+  return `${capital(nameOf('lines', line, recordIn(json, 'lines', line)))} (lines.${line}), lane ${lane}, ${fieldWords('lines', field)}`
+}
+
+function whatToDo(issue: z.core.$ZodIssue, path: readonly string[]): string {
+  if (issue.code === 'unrecognized_keys') return unknownFields(issue.keys)
+  if (issue.code !== 'invalid_type' || path.length > 2 || (path[0] === 'head' && path.length > 1)) return issue.message
+  const records = path.length === 1 && path[0] !== 'head'
+  return records
+    ? 'Write the records by their ids, between { and }.'
+    : 'Write the fields by their names, between { and }.'
 }
 
 function unknownFields(keys: readonly string[]): string {
