@@ -75,7 +75,7 @@ test('turns let so many run at once, in order, and go on after a failure', async
   expect(most).toBe(2)
 })
 
-test('[W3.12] a session read before a revocation is not held after it', () => {
+test('[W3.52] a session read before a revocation is not held after it', () => {
   const revocations = createRevocations(() => {})
   const memory = createSessionMemory(() => 1000, revocations)
   const identity = {

@@ -29,7 +29,7 @@ async function makeBudget(id: string) {
   await world.records.budgets.create(record, world.owner.id)
 }
 
-test('[W3.10] a change of role is seen at once and told of', async () => {
+test('[W3.50] a change of role is seen at once and told of', async () => {
   const told: unknown[] = []
   const off = world.access.onRevoked((what) => told.push(what))
   expect(await world.access.role(ada, budget)).toBeNull()
@@ -43,7 +43,7 @@ test('[W3.10] a change of role is seen at once and told of', async () => {
   expect(told).toEqual(Array(3).fill({ person: ada, budget }))
 })
 
-test('[W3.11] what another process changes is seen within ten seconds', async () => {
+test('[W3.51] what another process changes is seen within ten seconds', async () => {
   await world.access.setMember(budget, ada, 'editor')
   expect(await world.access.role(ada, budget)).toBe('editor')
   await world.records.members.set(budget, ada, null)

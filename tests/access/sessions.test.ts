@@ -16,7 +16,7 @@ afterAll(async () => {
   await world.close()
 })
 
-test('[W3.1] a person with the right password is known by the cookie', async () => {
+test('[W3.41] a person with the right password is known by the cookie', async () => {
   const { identity, headers, cookies } = await signedIn(world.access, 'OWNER@example.com ', OWNER.password)
   expect(identity).toMatchObject({ person: world.owner.id, name: OWNER.name, administrator: true, via: 'cookie' })
   expect(await world.access.identify(headers)).toEqual(identity)
@@ -52,7 +52,7 @@ test('over https the cookie is Secure', async () => {
   await secure.close()
 })
 
-test('[W3.2] sign-out ends the session at once, tells of it, and clears the cookie', async () => {
+test('[W3.42] sign-out ends the session at once, tells of it, and clears the cookie', async () => {
   const { identity, headers } = await signedIn(world.access, OWNER.email, OWNER.password)
   const { cookies } = await world.access.signOut(identity, headers)
   expect(world.access.valid(identity)).toBe(false)
@@ -61,7 +61,7 @@ test('[W3.2] sign-out ends the session at once, tells of it, and clears the cook
   expect(await world.access.identify(headers)).toBeNull()
 })
 
-test('[W3.3] a changed password ends every session of the person and none of others', async () => {
+test('[W3.43] a changed password ends every session of the person and none of others', async () => {
   const email = 'ada@example.com'
   const first = (await world.access.addPerson({ name: 'Ada', email }))?.password ?? ''
   const other = await signedIn(world.access, OWNER.email, OWNER.password)

@@ -33,7 +33,7 @@ function clocked() {
   }
 }
 
-test('[W3.7] five tries are free, then the wait doubles up to five minutes', () => {
+test('[W3.47] five tries are free, then the wait doubles up to five minutes', () => {
   const { fail, advance } = clocked()
   for (let i = 0; i < 5; i++) expect(fail('a', '192.0.2.1')).toBe(0)
   const waits: number[] = []
@@ -46,7 +46,7 @@ test('[W3.7] five tries are free, then the wait doubles up to five minutes', () 
   expect(waits).toEqual([1, 2, 4, 8, 16, 32, 64, 128, 256, 300, 300, 300])
 })
 
-test('[W3.8] a thousand failures of one account stop nobody else, at the same address or another', () => {
+test('[W3.48] a thousand failures of one account stop nobody else, at the same address or another', () => {
   const { fail, succeed, advance } = clocked()
   let looked = 0
   for (let i = 0; i < 1000; i++) {
@@ -103,7 +103,7 @@ test('an hour after the last failure the count is forgotten', () => {
   for (let i = 0; i < 5; i++) expect(fail('a', '192.0.2.1')).toBe(0)
 })
 
-test('[W3.9] a thousand wrong sign-ins do not keep another person out, and a forged x-forwarded-for changes nothing', async () => {
+test('[W3.49] a thousand wrong sign-ins do not keep another person out, and a forged x-forwarded-for changes nothing', async () => {
   const added = await world.access.addPerson({ name: 'Ada', email: 'ada@example.com' })
   const answers = await Promise.all(
     Array.from({ length: 1000 }, (_, i) =>

@@ -20,7 +20,7 @@ async function withToken(expiresAt: number | null = null) {
 const bearer = (token: string, more: Record<string, string> = {}) =>
   from('192.0.2.1', { authorization: `Bearer ${token}`, ...more })
 
-test('[W3.4] a token is its person, and only its SHA-256 is kept', async () => {
+test('[W3.44] a token is its person, and only its SHA-256 is kept', async () => {
   const { token, summary } = await withToken()
   expect(token).toMatch(/^hb_[A-Za-z0-9_-]{43}$/)
   expect(Buffer.from(token.slice(3), 'base64url')).toHaveLength(32)
@@ -32,14 +32,14 @@ test('[W3.4] a token is its person, and only its SHA-256 is kept', async () => {
   expect(JSON.stringify(kept)).not.toContain(token.slice(3))
 })
 
-test('[W3.5] a request with a bearer takes no cookie', async () => {
+test('[W3.45] a request with a bearer takes no cookie', async () => {
   const { cookie } = await withToken()
   expect(await world.access.identify(from('192.0.2.1', { cookie }))).not.toBeNull()
   expect(await world.access.identify(bearer('hb_wrong', { cookie }))).toBeNull()
   expect(await world.access.identify(bearer('', { cookie }))).toBeNull()
 })
 
-test('[W3.6] a revoked token is dropped at once; only its person can revoke it', async () => {
+test('[W3.46] a revoked token is dropped at once; only its person can revoke it', async () => {
   const { token, summary } = await withToken()
   const identity = await world.access.identify(bearer(token))
   if (!identity) throw new Error('no identity')

@@ -108,7 +108,7 @@ test('evaluating a file keeps nothing of it', async () => {
   expect((await call(listBudgets, by(owner))).json).toEqual(before.json)
 })
 
-test('[W9.1] a batch of edits is one entry of the trail, in the name of whoever sent it, with what it did to the margin', async () => {
+test('[W9.41] a batch of edits is one entry of the trail, in the name of whoever sent it, with what it did to the margin', async () => {
   const { seq, json, status } = await edit([
     { section: 'head', field: 'description', value: 'Shorter cable' },
     { line: 'cable', field: 'loss', value: '2 dB' },
@@ -136,7 +136,7 @@ test('[W9.1] a batch of edits is one entry of the trail, in the name of whoever 
   expect(evaluated).toEqual({ seq, evaluation: evaluate(now.budget, new Map()) })
 })
 
-test('[W9.2] an edit by token comes in by its own door', async () => {
+test('[W9.42] an edit by token comes in by its own door', async () => {
   const { token } = await sheet.access.createToken(owner.identity, 'script', null)
   const answer = await call(editBudget, {
     params: { id },
@@ -147,7 +147,7 @@ test('[W9.2] an edit by token comes in by its own door', async () => {
   expect((await trail({ limit: '1' }))[0]).toMatchObject({ door: 'token', person: owner.identity.person })
 })
 
-test('[W9.3] the same key with the same edits is stored once; with others it is refused', async () => {
+test('[W9.43] the same key with the same edits is stored once; with others it is refused', async () => {
   const edits = [{ line: 'cable', field: 'loss', value: '2 dB' }]
   const key = newKey()
   const first = await edit(edits, { key })
@@ -160,7 +160,7 @@ test('[W9.3] the same key with the same edits is stored once; with others it is 
   expect(await state()).toEqual(before)
 })
 
-test('[W9.4] an edit that expects an older state is a conflict and changes nothing', async () => {
+test('[W9.44] an edit that expects an older state is a conflict and changes nothing', async () => {
   const { seq } = await state()
   const mine = [{ line: 'cable', field: 'loss', value: '2 dB' }]
   expect((await edit(mine, { expectedSeq: seq })).status).toBe(200)
@@ -293,7 +293,7 @@ test('a budget that cannot be served says so to its members', async () => {
   }
 })
 
-test('[W3.17] no GET handler writes a byte to the databases', async () => {
+test('[W3.57] no GET handler writes a byte to the databases', async () => {
   const { cookie } = await sheet.as()
   await call(readEvaluation, by(owner))
   const before = await fingerprint()

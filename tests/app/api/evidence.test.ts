@@ -80,7 +80,7 @@ test('a file name is one line without a folder', async () => {
   }
 })
 
-test('[W6.1] an upload over 100 MB is cut off while it comes, and nothing of it stays', async () => {
+test('[W6.41] an upload over 100 MB is cut off while it comes, and nothing of it stays', async () => {
   const before = await files()
   const chunk = new Uint8Array(4 * 1024 * 1024)
   let sent = 0

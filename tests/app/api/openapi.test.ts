@@ -109,7 +109,7 @@ test('over https the cookie has its secure name', () => {
   expect(parsed.components.securitySchemes.cookie.name).toBe('halfbaud.session_token')
 })
 
-test('[W3.14] the list of problems is closed: every code is declared by an operation, and has words', () => {
+test('[W3.54] the list of problems is closed: every code is declared by an operation, and has words', () => {
   const declared = new Set(OPERATIONS.flatMap(problemsOf))
   expect([...declared].sort()).toEqual(Object.keys(PROBLEMS).sort())
   for (const { status, title, todo } of Object.values(PROBLEMS)) {

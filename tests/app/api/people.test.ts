@@ -111,7 +111,7 @@ test('the session is renewed by PUT, and GET leaves it as it is', async () => {
   expect((await call(whoAmI, { headers: { cookie } })).json).toEqual(json)
 })
 
-test('[W3.15] a changed password ends the other sessions and needs the current one', async () => {
+test('[W3.55] a changed password ends the other sessions and needs the current one', async () => {
   const { email, password } = await newPerson()
   const here = await session(email, password)
   const elsewhere = await session(email, password)
@@ -139,7 +139,7 @@ test('only the administrator adds people, and everybody sees who is here', async
   expect(again.code).toBe('e-mail-taken')
 })
 
-test('[W3.16] a token works without Origin, takes no cookie, and cannot make tokens or change the password', async () => {
+test('[W3.56] a token works without Origin, takes no cookie, and cannot make tokens or change the password', async () => {
   const { cookie } = await session()
   const made = await call(createToken, { json: { name: 'build server', expiresAt: null }, headers: { cookie } })
   const { secret, token } = made.json as { secret: string; token: { id: string } }

@@ -84,7 +84,7 @@ test('a route file exports handlers and dynamic, nothing else', async () => {
   }
 })
 
-describe.each(named(changing))('[W3.13] %s', (_, { route }) => {
+describe.each(named(changing))('[W3.53] %s', (_, { route }) => {
   const sent = typed(route.declaration)
 
   test.each([
