@@ -1,6 +1,5 @@
 import type { Metadata } from 'next'
 import { headers } from 'next/headers'
-import Link from 'next/link'
 import { notFound } from 'next/navigation'
 import { services } from '../../services'
 import { Shell } from '../../shell/Shell'
@@ -31,13 +30,8 @@ export default async function BudgetPage({ params }: Props) {
   // A stranger learns nothing here, not even that the budget exists.
   if (!role) notFound()
   const read = await budgets.read(id)
-  const where = (
-    <Link href="/" title="Back to all budgets">
-      Budgets
-    </Link>
-  )
   return (
-    <Shell where={where} identity={identity}>
+    <Shell where="Worksheet" identity={identity}>
       {read ? (
         <Worksheet
           first={{

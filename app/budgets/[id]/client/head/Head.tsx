@@ -15,7 +15,7 @@ export function Head({ state, glance }: { state: SheetState; glance: boolean }) 
   const { canWrite, undo, redo } = useBench()
   const name = budget.head.name ?? 'Budget without a name'
   return (
-    <header className={css.head}>
+    <header className={css.head} data-compact={glance || undefined}>
       <div className={css.title}>
         <h1 className={css.unseen}>{name}</h1>
         <FieldSlip spec={fieldSlip('head', null, 'name', budget.head.name)} hideLabel of="the budget" />

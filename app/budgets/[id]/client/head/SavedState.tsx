@@ -13,7 +13,12 @@ export function SavedState({ state }: { state: SheetState }) {
       </svg>
       <span>
         <strong suppressHydrationWarning>{title}</strong>
-        <span suppressHydrationWarning>{detail}</span>
+        <span suppressHydrationWarning>{detail}</span>{' '}
+        {state.connection.state === 'closed' && (
+          <button type="button" className={css.plainButton} onClick={() => window.location.reload()}>
+            Load the page anew
+          </button>
+        )}
       </span>
     </p>
   )

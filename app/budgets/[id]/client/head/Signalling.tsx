@@ -1,4 +1,5 @@
 'use client'
+import { useState } from 'react'
 import { FieldSlip } from '../slips/FieldSlip'
 import { fieldSlip } from '../slips/spec'
 import { useReading } from '../state/contexts'
@@ -9,15 +10,16 @@ import { signallingFacts, signallingLine } from './signallingFacts'
 const ALWAYS = ['bitRate', 'rateType', 'code', 'reference', 'laneCount', 'referenceTemperature'] as const
 const CODING = ['codedBits', 'codedSymbols', 'codingBits', 'codingLineBits', 'fecMessage', 'fecCodeword'] as const
 
-/** The link and its signalling as slips, and what follows from them. Folded once the rate is known. */
+/** The link and its signalling as slips, and what follows from them. Folded at first where the rate is known. */
 export function Signalling() {
   const { budget, evaluation } = useReading()
   const { head } = budget
   const { signalling } = evaluation
+  const [open, setOpen] = useState(signalling.nyquist === null)
   const slips = (fields: readonly (keyof typeof head & string)[]) =>
     fields.map((field) => <FieldSlip key={field} spec={fieldSlip('head', null, field, head[field])} />)
   return (
-    <details className={css.signalling} open={signalling.nyquist === null ? true : undefined}>
+    <details className={css.signalling} open={open} onToggle={(event) => setOpen(event.currentTarget.open)}>
       <summary>
         <span className={css.summaryTitle}>Signalling</span> {signallingLine(head, signalling)}
       </summary>

@@ -7,12 +7,18 @@ import { AllowanceSwitch } from './AllowanceSwitch'
 import css from './picture.module.css'
 import { useWidth } from './useWidth'
 
-/** The level diagram of the allowance in view. */
+/** The level diagram of the allowance in view; nothing where there is none yet. */
 export function Picture({ people, was }: { people: readonly Present[]; was: Was | null }) {
+  const { allowance } = useView()
+  return allowance === null ? null : <PictureOf allowance={allowance} people={people} was={was} />
+}
+
+type Props = { readonly allowance: string; readonly people: readonly Present[]; readonly was: Was | null }
+
+function PictureOf({ allowance, people, was }: Props) {
   const { budget, evaluation } = useReading()
-  const { allowance, selected, select } = useView()
+  const { selected, select } = useView()
   const { ref, width } = useWidth<HTMLDivElement>()
-  if (allowance === null) return null
   return (
     <section aria-label="Level diagram" className={css.picture}>
       <AllowanceSwitch />

@@ -1,10 +1,14 @@
+'use client'
+import { useBench } from '../state/contexts'
 import css from './help.module.css'
 
-const KEYS = [
+const MOVING = [
   ['arrows', 'move'],
   ['Tab', 'along the row, then out'],
   ['Home End', 'ends of the row'],
   ['Page Up, Page Down', 'ten rows'],
+] as const
+const WRITING = [
   ['Enter, F2 or typing', 'edit'],
   ['Enter', 'take'],
   ['Escape', 'restore'],
@@ -16,9 +20,11 @@ const KEYS = [
 
 /** What the keys do in the rows. */
 export function KeysHelp() {
+  const { canWrite } = useBench()
+  const keys = canWrite ? [...MOVING, ...WRITING] : MOVING
   return (
     <dl className={css.help} aria-label="Keys in the rows">
-      {KEYS.map(([key, does]) => (
+      {keys.map(([key, does]) => (
         <div key={key}>
           <dt>
             <kbd>{key}</kbd>

@@ -40,6 +40,9 @@ export function RowHead({ section, id, label, children, onRemove }: Props) {
     >
       <span className={css.unseen}>{label}</span>
       <span aria-hidden="true">{children}</span>
+      <span aria-hidden="true" className={css.more}>
+        detail
+      </span>
       <Standing others={others} />
     </RowHeader>
   )

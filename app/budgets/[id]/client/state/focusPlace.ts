@@ -7,21 +7,27 @@ export type Goal = { readonly section: string; readonly id: string | null; reado
  */
 export function focusPlace(root: ParentNode, goal: Goal): boolean {
   const found = candidates(goal).flatMap((selector) => [...root.querySelectorAll<HTMLElement>(selector)])
-  for (const element of found) {
-    for (
-      let details = element.closest('details');
-      details;
-      details = details.parentElement?.closest('details') ?? null
-    ) {
-      details.open = true
-    }
-  }
-  const element = found.find((each) => each.checkVisibility()) ?? null
+  const element = found.find((each) => each.checkVisibility()) ?? found.find(unfolded)
   if (!element) return false
   const target = element.tabIndex >= 0 || element.hasAttribute('tabindex') ? element : controlIn(element)
   element.scrollIntoView({ block: 'nearest' })
   target?.focus({ preventScroll: true })
   return true
+}
+
+/** Opens what an element is folded into. @returns whether it can be seen now (on a narrow screen some fields cannot) */
+function unfolded(element: HTMLElement): boolean {
+  const folds = enclosing(element).filter((details) => !details.open)
+  for (const details of folds) details.open = true
+  if (element.checkVisibility()) return true
+  for (const details of folds) details.open = false
+  return false
+}
+
+function enclosing(element: Element): readonly HTMLDetailsElement[] {
+  const details = element.closest('details')
+  const above = details?.parentElement
+  return details ? [details, ...(above ? enclosing(above) : [])] : []
 }
 
 const controlIn = (element: HTMLElement) => element.querySelector<HTMLElement>('input, select, textarea, button')
