@@ -36,6 +36,8 @@ export class FakeServer {
   /** Type and sync type of every frame that is not one of ours. */
   readonly protocolFrames: string[] = []
   connections = 0
+  /** Answers every hello with 'reload'. */
+  neverWelcome = false
   /** What to do with an edit: refuse it, cut the connection before it is kept or in place of its acknowledgement. */
   script: (sent: Sent) => Verdict = () => null
 
@@ -75,6 +77,11 @@ export class FakeServer {
 
   closeAll(code: number): void {
     for (const socket of this.sockets.keys()) socket.close(code)
+  }
+
+  closeFirst(code: number): void {
+    const [socket] = this.sockets.keys()
+    socket?.close(code)
   }
 
   cutAll(): void {
@@ -120,7 +127,7 @@ export class FakeServer {
 
   private hello(socket: WebSocket, state: { ready: boolean }, hello: Hello): void {
     this.hellos.push(hello)
-    if (hello.epoch !== null && hello.epoch !== this.epoch) {
+    if (this.neverWelcome || (hello.epoch !== null && hello.epoch !== this.epoch)) {
       // What is on its way already is not an offence.
       this.sockets.delete(socket)
       socket.close(CLOSE.reload.code)

@@ -7,6 +7,7 @@ import { openIndexedDb } from '../../lib/sheet/outbox'
 import { readBudget, seedUpdate } from '../../lib/sheet/seed'
 import { FakeServer } from './fakeServer'
 import { canonical, canonicalDoc, docOf, sampleSeed } from './sample'
+import { seeded } from './seeded'
 import { allSaved, Browser, setLoss, until } from './tabs'
 
 let server: FakeServer
@@ -37,17 +38,6 @@ const lane = (index: number): Operation => ({
   field: 'length',
   value: `${index + 1} in`,
 })
-
-/** A small seeded generator (mulberry32), so that a failing run can be repeated. */
-function seeded(seed: number) {
-  let state = seed
-  return () => {
-    state = (state + 0x6d2b79f5) | 0
-    let mixed = Math.imul(state ^ (state >>> 15), 1 | state)
-    mixed = (mixed + Math.imul(mixed ^ (mixed >>> 7), 61 | mixed)) ^ mixed
-    return ((mixed ^ (mixed >>> 14)) >>> 0) / 4294967296
-  }
-}
 
 /** What somebody else does on the server's document. Of two writes at once the one of the larger client id wins. */
 function elsewhere(operation: Operation, clientId: number) {

@@ -116,6 +116,25 @@ describe('a session', () => {
     expect(await again).toEqual([cell])
   })
 
+  test('[W10.9] told to reload again and again without a welcome, the page gives up and says so', async () => {
+    const tab = await browser.openLive()
+    server.neverWelcome = true
+    server.closeAll(CLOSE.reload.code)
+    const now = await until(tab, (next) => next.connection.state === 'closed')
+    expect(now.connection).toMatchObject({ code: CLOSE.reload.code, words: expect.stringContaining('reload') })
+    expect(server.connections).toBe(4)
+  })
+
+  test('[W2.12] a tab that is closed for good lets another one send', async () => {
+    const first = await browser.openLive()
+    const second = await browser.openLive()
+    server.closeFirst(CLOSE.slowHello.code)
+    await until(first, (now) => now.connection.state === 'closed')
+    second.edit([setLoss('1 dB')])
+    await allSaved(second)
+    expect(server.accepted.length).toBe(1)
+  })
+
   test.each([
     ['sign-in ran out', CLOSE.signInAgain.code, 'closed'],
     ['refused too often', CLOSE.refused.code, 'closed'],

@@ -1,12 +1,12 @@
 import * as Y from 'yjs'
-import { SCHEMA_VERSION } from '../../budget/schema'
 import { CLOSE } from '../closeCodes'
 import { type Batch, Outbox, type OutboxRecord } from '../outbox'
-import { MESSAGE, type Welcome } from '../wire'
+import { MESSAGE } from '../wire'
 import { createCellSender } from './cell'
 import { CONNECTING, closed, LIVE, offline } from './connectionWords'
 import { doAgain } from './doAgain'
 import { createEditing } from './editing'
+import { afterWelcome, helloOf } from './handshake'
 import { type Link, type LinkEvents, openLink } from './link'
 import { refusedEdits } from './refusedEdits'
 import { NEW_EPOCH, Sender } from './sender'
@@ -15,6 +15,9 @@ import { firstSnapshot, unsavedOf } from './snapshot'
 import { createStore } from './store'
 import { addToTrail } from './trail'
 import type { SheetOptions, SheetSession, SheetSnapshot } from './types'
+
+/** After so many attempts the page is older than the server (another schema), and cannot help itself. */
+const MANY_RELOADS = 3
 
 /** One generation: a document and its connection, thrown away together. */
 type Open = SheetDocument & {
@@ -36,6 +39,8 @@ export function openSheet(options: SheetOptions): SheetSession {
   let target: number | null = null
   let destroyed = false
   let quiet = false
+  /** How often in a row the server has told to reload without a welcome in between. */
+  let reloads = 0
   let shownRecords: readonly OutboxRecord[] = []
 
   const outbox = new Outbox(options.storage, outboxChanged)
@@ -69,7 +74,7 @@ export function openSheet(options: SheetOptions): SheetSession {
   })
   const showRefused = refusedEdits({ edit: editing.edit, dismiss: (editId) => outbox.commit({ dismiss: [editId] }) })
 
-  const release = options.locks.hold(`halfbaud/${options.person}/${options.budget}`, () => {
+  let release: (() => void) | null = options.locks.hold(`halfbaud/${options.person}/${options.budget}`, () => {
     sender.active = true
     doStaleAgain()
     sender.pump()
@@ -89,6 +94,12 @@ export function openSheet(options: SheetOptions): SheetSession {
     shownRecords = records
     if (meta.generation !== target) void reopen()
     sender.pump()
+  }
+
+  function letGo(): void {
+    sender.active = false
+    release?.()
+    release = null
   }
 
   function renew(batch: Batch): void {
@@ -165,11 +176,21 @@ export function openSheet(options: SheetOptions): SheetSession {
       store.patch({ ...patch, people: [] })
     }
     return {
-      opened: () => ifOpen(hello),
+      opened: () =>
+        ifOpen(({ doc, link }) => {
+          const header = helloOf(options.person, outbox.meta, doc)
+          link.send({ type: MESSAGE.hello, header })
+        }),
       welcome: (message) =>
         ifOpen((current) => {
-          if (!takeWelcome(message)) return
+          const meta = afterWelcome(outbox.meta, message)
+          if (meta === null) {
+            renew(NEW_EPOCH)
+            return
+          }
+          outbox.commit({ meta })
           current.welcomed = true
+          reloads = 0
           live()
         }),
       synced: () =>
@@ -185,32 +206,18 @@ export function openSheet(options: SheetOptions): SheetSession {
       presence: (people) => store.patch({ people }),
       trail: (entries) => store.patch({ trail: addToTrail(store.get().trail, entries) }),
       lost: (code) => gone({ connection: offline(code) }),
-      closed: (code) => {
-        // Told to reload before it knew any epoch, this page is older than the server: it cannot help itself.
-        const newEpoch = code === CLOSE.reload.code && outbox.meta.epoch !== null
-        gone({ connection: newEpoch ? CONNECTING : closed(code) })
-        if (newEpoch) renew(NEW_EPOCH)
+      closed(code) {
+        const again = code === CLOSE.reload.code && reloads < MANY_RELOADS
+        gone({ connection: again ? CONNECTING : closed(code) })
+        if (again) {
+          reloads++
+          renew(NEW_EPOCH)
+          return
+        }
+        // Another tab may still be able to send.
+        letGo()
       },
     }
-  }
-
-  function hello(current: Open): void {
-    const { epoch, seq, head } = outbox.meta
-    // Yjs may change a document's client id: it is read now and not kept.
-    const { clientID: clientId } = current.doc
-    const header = { person: options.person, epoch, clientId, seq, head, schemaVersion: SCHEMA_VERSION }
-    current.link.send({ type: MESSAGE.hello, header })
-  }
-
-  /** @returns false if the welcome is for another epoch than the document's */
-  function takeWelcome({ epoch, role, seq, head }: Welcome): boolean {
-    const { meta } = outbox
-    if (meta.epoch !== null && meta.epoch !== epoch) {
-      renew(NEW_EPOCH)
-      return false
-    }
-    outbox.commit({ meta: seq > meta.seq ? { epoch, role, seq, head } : { epoch, role } })
-    return true
   }
 
   /** Records of an older document, or made by another tab before it noticed, are done again in this one. */
@@ -239,7 +246,7 @@ export function openSheet(options: SheetOptions): SheetSession {
     async destroy() {
       if (destroyed) return
       destroyed = true
-      release()
+      letGo()
       cell.stop()
       shut()
       await outbox.close()
