@@ -20,7 +20,7 @@ import { useBench, useReading, ViewContext } from './state/contexts'
 import { placeOf } from './state/focusPlace'
 import type { SheetState } from './state/sheet'
 import type { FirstState } from './state/useSheet'
-import { useViewState } from './state/useView'
+import { type Kept, useViewState } from './state/useView'
 import { TakenOut } from './tables/recordDeeds'
 import { Tables } from './tables/Tables'
 import { TrailPanel } from './trail/TrailPanel'
@@ -28,25 +28,30 @@ import { TrailPanel } from './trail/TrailPanel'
 type Props = {
   readonly first: FirstState
   readonly state: SheetState
+  readonly kept: Kept
   readonly stand: ((cell: Cell | null) => void) | null
 }
 
 /** One generation of the worksheet: everything on the page, and what the page as a whole does with focus and keys. */
-export function Sheet({ first, state, stand }: Props) {
+export function Sheet({ first, state, kept, stand }: Props) {
   const { budget, evaluation } = useReading()
   const bench = useBench()
   const root = useRef<HTMLDivElement>(null)
   const verdicts = useRef<HTMLDivElement>(null)
-  const view = useViewState(first.budgetId, evaluation, root)
+  const view = useViewState(first.budgetId, evaluation, root, kept)
   const { trail, people } = state
   const was = useWas({ trail, people, budget, person: first.person, allowance: view.allowance })
 
   const onFocus = (event: FocusEvent) => {
     const place = placeOf(event.target)
+    kept.focus.current = place
     if (!place) return
     stand?.(place)
     const { section, id } = place
     if (id !== null && (section === 'lines' || section === 'planes')) view.select({ section, id })
+  }
+  const onBlur = () => {
+    kept.focus.current = null
   }
   const onKeyDown = (event: KeyboardEvent) => {
     const key = event.key.toLowerCase()
@@ -62,9 +67,18 @@ export function Sheet({ first, state, stand }: Props) {
 
   return (
     <ViewContext value={view}>
-      <section ref={root} aria-label="Worksheet" className={css.sheet} onFocus={onFocus} onKeyDown={onKeyDown}>
+      <section
+        ref={root}
+        aria-label="Worksheet"
+        className={css.sheet}
+        onFocus={onFocus}
+        onBlur={onBlur}
+        onKeyDown={onKeyDown}
+      >
         <Head state={state} glance={useOutOfSight(verdicts)} />
-        <RefusedList refused={state.refused} />
+        <div aria-live="assertive">
+          <RefusedList refused={state.refused} />
+        </div>
         <div ref={verdicts} className={css.verdicts}>
           <Headlines />
           <Proof />

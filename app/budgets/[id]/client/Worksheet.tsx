@@ -10,6 +10,7 @@ import { createRoving } from './state/roving'
 import { useAnnouncement } from './state/useAnnouncement'
 import { useOthers } from './state/useOthers'
 import { type FirstState, useSheet } from './state/useSheet'
+import { useKept } from './state/useView'
 
 /**
  * The worksheet of one budget. What must outlive a session (drafts, where the focus is) is kept here; the sheet below is
@@ -19,6 +20,7 @@ export function Worksheet({ first }: { first: FirstState }) {
   const { state, deeds } = useSheet(first)
   const [drafts] = useState(createDrafts)
   const [roving] = useState(createRoving)
+  const kept = useKept()
   const [refusal, setRefusal] = useState<string | null>(null)
   const said = useAnnouncement(state.trail, first.person, state.budget)
   const others = useOthers(state.people)
@@ -49,7 +51,13 @@ export function Worksheet({ first }: { first: FirstState }) {
       <BenchContext value={bench}>
         <UnsavedContext value={state.unsavedPlaces}>
           <OthersContext value={others}>
-            <Sheet key={Math.max(1, state.generation)} first={first} state={state} stand={deeds?.stand ?? null} />
+            <Sheet
+              key={Math.max(1, state.generation)}
+              first={first}
+              state={state}
+              kept={kept}
+              stand={deeds?.stand ?? null}
+            />
             <Announcer said={said} refusal={refusal} onHeard={() => setRefusal(null)} />
           </OthersContext>
         </UnsavedContext>

@@ -9,7 +9,8 @@ export function focusPlace(root: ParentNode, goal: Goal): boolean {
   const found = candidates(goal).flatMap((selector) => [...root.querySelectorAll<HTMLElement>(selector)])
   const element = found.find((each) => each.checkVisibility()) ?? found.find(unfolded)
   if (!element) return false
-  const target = element.tabIndex >= 0 || element.hasAttribute('tabindex') ? element : controlIn(element)
+  const own = element.hasAttribute('tabindex') && element.dataset.editing === undefined
+  const target = own ? element : controlIn(element)
   element.scrollIntoView({ block: 'nearest' })
   target?.focus({ preventScroll: true })
   return true

@@ -7,11 +7,30 @@ import { focusPlace, type Goal } from './focusPlace'
 /** A goal that has not come onto the page by then is given up: the focus must not jump later. */
 const PATIENCE_MS = 1_000
 
-/** What this person looks at: nothing of it is shared. */
-export function useViewState(budgetId: string, evaluation: Evaluation, root: RefObject<HTMLElement | null>): View {
+/** What outlives a session: which row and allowance one looks at, and where the focus is. */
+export type Kept = {
+  readonly selected: Selected | null
+  readonly select: (row: Selected | null) => void
+  readonly chosen: string | null
+  readonly showAllowance: (id: string) => void
+  readonly focus: { current: Goal | null }
+}
+
+export function useKept(): Kept {
   const [selected, select] = useState<Selected | null>(null)
-  const [detailOpen, openDetail] = useState(false)
   const [chosen, showAllowance] = useState<string | null>(null)
+  const focus = useRef<Goal | null>(null)
+  return { selected, select, chosen, showAllowance, focus }
+}
+
+/** What this person looks at: nothing of it is shared. */
+export function useViewState(
+  budgetId: string,
+  evaluation: Evaluation,
+  root: RefObject<HTMLElement | null>,
+  { selected, select, chosen, showAllowance, focus }: Kept,
+): View {
+  const [detailOpen, openDetail] = useState(false)
   const [, look] = useState(0)
   const goal = useRef<{ place: Goal; since: number } | null>(null)
 
@@ -23,7 +42,7 @@ export function useViewState(budgetId: string, evaluation: Evaluation, root: Ref
       goal.current = { place, since: Date.now() }
       look((turn) => turn + 1)
     },
-    [root],
+    [root, select],
   )
 
   useLayoutEffect(() => {
@@ -32,11 +51,17 @@ export function useViewState(budgetId: string, evaluation: Evaluation, root: Ref
     if (focusPlace(root.current, goal.current.place) || late) goal.current = null
   })
 
+  // A session made anew builds the page anew: the focus goes back to where it was.
+  useLayoutEffect(() => {
+    if (focus.current && root.current && document.activeElement === document.body)
+      focusPlace(root.current, focus.current)
+  }, [focus, root])
+
   const known = evaluation.allowances.some(({ id }) => id === chosen)
   const allowance = known ? chosen : (evaluation.allowances[0]?.id ?? null)
   return useMemo(
     () => ({ budgetId, selected, select, detailOpen, openDetail, allowance, showAllowance, goTo }),
-    [budgetId, selected, detailOpen, allowance, goTo],
+    [budgetId, selected, select, detailOpen, allowance, showAllowance, goTo],
   )
 }
 
