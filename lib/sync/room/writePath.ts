@@ -55,8 +55,9 @@ export class WritePath implements Committing {
   readonly intake: Intake
   /** The budget as committed. */
   budget: Budget
-  /** After a failed commit, until the journal's head has been read again. */
+  /** After a failed commit, until the journal's head has been read again: edits are taken and wait. */
   private suspect = false
+  private isClosed = false
 
   constructor(
     private readonly parts: WritePathParts,
@@ -129,7 +130,7 @@ export class WritePath implements Committing {
 
   take(limit: number): readonly Row[] {
     const { roster, chain, admission, now } = this.parts
-    if (!roster.isSettled || this.suspect) return []
+    if (!roster.isSettled || this.suspect || this.isClosed) return []
     const dropped = this.intake.sift(
       (item) => (item.kind === 'edit' ? admission.stopped(item.actor) : null),
       (edit) => this.mayUse(edit),
@@ -176,7 +177,7 @@ export class WritePath implements Committing {
 
   /** Nothing more is taken; what waits is refused. */
   close(): void {
-    this.suspect = true
+    this.isClosed = true
     this.refuseAll()
     this.intake.destroy()
   }
@@ -210,7 +211,7 @@ export class WritePath implements Committing {
   }
 
   private full(): Refusal | null {
-    if (this.suspect) return { code: 'not-stored', reason: 'The server cannot write just now; try again.' }
+    if (this.isClosed) return { code: 'not-stored', reason: 'The budget is being closed; try again.' }
     const { size, bytes } = this.intake
     if (size < MOST_WAITING && bytes < MOST_BYTES) return null
     return { code: 'not-stored', reason: 'Too many edits wait for the disk; try again.' }

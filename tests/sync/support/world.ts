@@ -7,6 +7,7 @@ import { onTestFinished } from 'vitest'
 import { ENGINE } from '../../../lib/budget/engine'
 import { type Budget, budgetSchema } from '../../../lib/budget/schema'
 import { openJournal } from '../../../lib/records/journal/open'
+import type { Journal } from '../../../lib/records/journal/types'
 import type { StoreProblem } from '../../../lib/records/types'
 import type { Timers } from '../../../lib/sync/clock'
 import { openSync, type Sync } from '../../../lib/sync/open'
@@ -35,9 +36,10 @@ export async function openWorld(options: WorldOptions = {}) {
     await rm(directory, { recursive: true, force: true })
   })
 
-  async function start() {
+  /** @param over what stands between the server and its journal */
+  async function start(over: (journal: Journal) => Journal = (journal) => options.disk?.over(journal) ?? journal) {
     const onDisk = await openJournal(join(directory, 'journal.sqlite'))
-    const journal = options.disk?.over(onDisk) ?? onDisk
+    const journal = over(onDisk)
     const sessions = fakeSessions(records)
     const store = { records, journal, evidence: NO_FILES, problems: options.problems ?? [], close: async () => {} }
     const sync = await openSync({
