@@ -66,5 +66,7 @@ export function countedLine({ item, sign, loss }: Counted): CountedLine {
   if (sign === 0) return { id: item.id, countedDb: 0, lowDb: 0, highDb: 0 }
   if (nominal === null) return { id: item.id, countedDb: null, lowDb: null, highDb: null }
   const [down, up] = sign > 0 ? [spread.lowExtreme, spread.highExtreme] : [spread.highExtreme, spread.lowExtreme]
-  return { id: item.id, countedDb: sign * nominal, lowDb: sign * nominal - down, highDb: sign * nominal + up }
+  // Subtracted from 0, not multiplied by −1: a loss of nothing must not become −0, which JSON does not know.
+  const counted = sign > 0 ? nominal : 0 - nominal
+  return { id: item.id, countedDb: counted, lowDb: counted - down, highDb: counted + up }
 }
