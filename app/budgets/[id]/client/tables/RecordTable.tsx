@@ -1,6 +1,6 @@
 'use client'
 import type { ReactNode } from 'react'
-import type { Scalar, SectionName } from '../../../../../lib/budget/schema'
+import type { Scalar } from '../../../../../lib/budget/schema'
 import { inOrder } from '../deeds/records'
 import { FieldSlip } from '../slips/FieldSlip'
 import { fieldSlip, toleranceSlip } from '../slips/spec'
@@ -8,10 +8,10 @@ import { useReading } from '../state/contexts'
 import { labelOf } from '../words/labels'
 import { recordName } from '../words/say'
 import { AddRecord, TakenOut, TakeOut } from './recordDeeds'
+import type { TableSection } from './section'
 import css from './tables.module.css'
 
 type Flat = Readonly<Record<string, Scalar>> & { readonly order: string; readonly removed: boolean }
-export type TableSection = Exclude<SectionName, 'lines' | 'planes' | 'layers' | 'evidence' | 'figures' | 'signOffs'>
 
 type Props = {
   readonly section: TableSection

@@ -4,7 +4,7 @@ import { addRecord, removedOnes, setField } from '../deeds/records'
 import { useBench, useReading, useView } from '../state/contexts'
 import { RECORD_WORDS } from '../words/labels'
 import { recordName } from '../words/say'
-import type { TableSection } from './RecordTable'
+import type { TableSection } from './section'
 import css from './tables.module.css'
 
 export function AddRecord({ section, fresh }: { section: TableSection; fresh: Readonly<Record<string, Scalar>> }) {
