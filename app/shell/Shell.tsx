@@ -1,6 +1,7 @@
 import Link from 'next/link'
 import type { ReactNode } from 'react'
 import type { Identity } from '../../lib/access/identity'
+import { KeepSignedIn } from './client/KeepSignedIn'
 import { SignOut } from './client/SignOut'
 import { ThemeSwitch } from './client/ThemeSwitch'
 import { Footer } from './Footer'
@@ -41,6 +42,7 @@ export async function Shell({ where, identity, children }: Props) {
         {children}
       </main>
       <Footer />
+      {identity && <KeepSignedIn />}
     </>
   )
 }

@@ -29,7 +29,10 @@ export function guard(request: IncomingMessage, response: ServerResponse, option
   response.setHeader('x-content-type-options', 'nosniff')
   response.setHeader('referrer-policy', 'same-origin')
   response.setHeader('x-frame-options', 'DENY')
-  if (options.policy) {
+  if (request.url?.startsWith('/api/')) {
+    // Data, never a page: whatever a browser is talked into showing of it may run nothing.
+    response.setHeader('content-security-policy', "default-src 'none'; frame-ancestors 'none'; sandbox")
+  } else if (options.policy) {
     const nonce = randomBytes(16).toString('base64')
     const policy = policyWith(nonce, wanted)
     request.headers['x-nonce'] = nonce

@@ -67,3 +67,8 @@ async function raw(port: string, text: string): Promise<string> {
     socket.on('error', reject)
   })
 }
+
+test('what the API answers may run nothing in a browser', async () => {
+  const response = await fetch(`${await listen()}/api/v1/health`)
+  expect(response.headers.get('content-security-policy')).toBe("default-src 'none'; frame-ancestors 'none'; sandbox")
+})
