@@ -1,8 +1,7 @@
 import * as Y from 'yjs'
 import type { Scalar, SectionName } from '../budget/schema'
 import type { Operation, Place } from './change'
-import { type AppliedEdit, captureUpdate, type FieldWrite, TYPED } from './edits'
-import { writeFieldIfStill } from './edits/apply'
+import { type AppliedEdit, captureUpdate, type FieldWrite, TYPED, writeFieldIfStill } from './edits'
 import { ROOTS } from './layout'
 
 /** What an undo or redo did, to be sent like any edit. */

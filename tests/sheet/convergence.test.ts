@@ -14,7 +14,7 @@ const step = fc.record({
   take: fc.integer({ min: 1, max: 4 }),
 })
 
-test('[W1.8] two to five people, edits in any order and delivery: the same budget everywhere, and it fits the schema', () => {
+test('[W1.68] two to five people, edits in any order and delivery: the same budget everywhere, and it fits the schema', () => {
   let made = 0
   let refused = 0
   fc.assert(

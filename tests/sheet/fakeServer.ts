@@ -15,6 +15,7 @@ import {
   type Message,
   type Refused,
   type Role,
+  type TrailEntry,
 } from '../../lib/sheet/wire'
 import { docOf } from './sample'
 
@@ -66,6 +67,10 @@ export class FakeServer {
   editElsewhere(update: Uint8Array): void {
     Y.applyUpdate(this.doc, update)
     this.fanOut(update, null)
+  }
+
+  tell(entries: TrailEntry[]): void {
+    for (const socket of this.sockets.keys()) this.send(socket, { type: MESSAGE.trail, header: entries })
   }
 
   /** The same content under a new epoch, as after a restore. */

@@ -52,7 +52,7 @@ describe.each(stores)('what a browser keeps, in %s', (_name, open) => {
     second.close()
   })
 
-  test('[W2.9] nothing is stored where a condition fails: another generation, a record gone', async () => {
+  test('[W2.69] nothing is stored where a condition fails: another generation, a record gone', async () => {
     const { first, second } = await open()
     await first.write({ add: [record('a')] })
     expect(await first.write({ ifGeneration: 2, add: [record('b')], updates: [new Uint8Array([1])] })).toBe(false)
@@ -79,7 +79,7 @@ describe.each(stores)('what a browser keeps, in %s', (_name, open) => {
     second.close()
   })
 
-  test('[W2.6] one tab sees what another has written; its own batches hold at once and never seem undone', async () => {
+  test('[W2.66] one tab sees what another has written; its own batches hold at once and never seem undone', async () => {
     const { first, second } = await open()
     const seen: string[][] = []
     let wake: (() => void) | null = null
@@ -142,14 +142,14 @@ describe('doing an edit again on another document', () => {
     bases,
   })
 
-  test('[W10.6] several writes of one field, and writes into a line added by the same edit, fit together', () => {
+  test('[W10.66] several writes of one field, and writes into a line added by the same edit, fit together', () => {
     const add = { op: 'add', section: 'lines', id: 'pad', values: { order: 'a3' } } as const
     const operations = [setLoss('1 dB'), setLoss('2 dB'), add, setLoss('3 dB', 'pad')]
     const fit = fitDeed(budget(), deed(operations, [null, '1 dB', null, null]), true)
     expect(fit).toEqual({ fits: operations, conflicts: [] })
   })
 
-  test('[W10.7] what already stands so is done, whatever it was made on', () => {
+  test('[W10.67] what already stands so is done, whatever it was made on', () => {
     const length = { op: 'set', section: 'lines', id: 'trace', field: 'length', value: '6 in' } as const
     const add = { op: 'add', section: 'lines', id: 'via', values: { order: 'a3' } } as const
     const lane = { op: 'lane', line: 'trace', lane: 2, field: 'length', value: '6.4 in' } as const
@@ -159,7 +159,7 @@ describe('doing an edit again on another document', () => {
     })
   })
 
-  test('[W10.8] typing in a note that others changed goes in beside theirs, but not after a new epoch', () => {
+  test('[W10.68] typing in a note that others changed goes in beside theirs, but not after a new epoch', () => {
     const note = { op: 'note', section: 'lines', id: 'via', field: 'note', text: 'Drilled!', base: 'Drilled' } as const
     expect(fitDeed(budget(), deed([note], ['Drilled']), true).fits).toEqual([note])
     expect(fitDeed(budget(), deed([note], ['Drilled']), false).conflicts.length).toBe(1)

@@ -10,7 +10,7 @@ import { createDoc, readBudget } from '../../lib/sheet/seed'
 import { canonical, docOf, operations, replay, sampleDoc } from './sample'
 
 describe('the plain copy of a document', () => {
-  test('[W5.1] 300 seeds: every entry has the right before, the entries replay to the document, the copy equals it', () => {
+  test('[W5.61] 300 seeds: every entry has the right before, the entries replay to the document, the copy equals it', () => {
     let visible = 0
     let invisible = 0
     fc.assert(
@@ -44,12 +44,13 @@ describe('the plain copy of a document', () => {
       ),
       { numRuns: 300 },
     )
+    // How many entries changed nothing that is seen: overtaken, or equal to what stood there.
     console.log(`mirror: ${visible} entries with a visible change, ${invisible} without`)
     expect(visible).toBeGreaterThan(1000)
     expect(invisible).toBeGreaterThan(0)
-  })
+  }, 60_000)
 
-  test('[W5.2] what did not change keeps its identity', () => {
+  test('[W5.62] what did not change keeps its identity', () => {
     const doc = sampleDoc()
     const mirror = createMirror(doc)
     const before = mirror.json
@@ -61,7 +62,7 @@ describe('the plain copy of a document', () => {
     expect(before.lines.via?.loss).toBeNull()
   })
 
-  test('[W5.3] an added line is told field by field, shown at once, with nothing of how it was made', () => {
+  test('[W5.63] an added line is told field by field, shown at once, with nothing of how it was made', () => {
     const author = sampleDoc()
     const server = docOf(Y.encodeStateAsUpdate(author))
     const mirror = createMirror(server)
@@ -97,7 +98,7 @@ describe('the plain copy of a document', () => {
       'a list in a root',
       (doc) => (doc.getMap('lines') as unknown as Y.AbstractType<unknown>) && doc.getMap('head').set('name', ['a']),
     ],
-  ])('[W5.4] leaving the layout is said: %s', (_name, damage) => {
+  ])('[W5.64] leaving the layout is said: %s', (_name, damage) => {
     const doc = sampleDoc()
     const mirror = createMirror(doc)
     damage(doc)

@@ -53,7 +53,7 @@ describe('typing while others type', () => {
     )
   })
 
-  test('[W1.7] two people offline: the note holds what both typed, in both documents', () => {
+  test('[W1.67] two people offline: the note holds what both typed, in both documents', () => {
     const left = sampleDoc()
     const right = docOf(Y.encodeStateAsUpdate(left))
     const first = applyEdit(left, [
@@ -69,7 +69,7 @@ describe('typing while others type', () => {
     expect(readBudget(right).lines.via?.note).toBe('To be back-drilled, plugged')
   })
 
-  test('[W1.7] what came in while the cell was open stays', () => {
+  test('[W1.67] what came in while the cell was open stays', () => {
     const doc = sampleDoc()
     applyEdit(doc, [{ op: 'note', section: 'lines', id: 'via', field: 'note', text: 'Both: Back-drilled' }])
     const edit = applyEdit(doc, [

@@ -55,7 +55,7 @@ describe('channel order', () => {
     expect(ids(insert(sampleBudget(), 'new', 'end')).at(-1)).toBe('new')
   })
 
-  test('[W1.9] two people inserted at once and got equal keys: a third line still goes exactly between them', () => {
+  test('[W1.69] two people inserted at once and got equal keys: a third line still goes exactly between them', () => {
     const budget = withLines({ a: 'a0', left: 'a1', right: 'a1', z: 'a2' })
     expect(ids(insert(budget, 'mid', 'left'))).toEqual(['a', 'left', 'mid', 'right', 'z'])
     expect(ids(insert(budget, 'mid', 'right'))).toEqual(['a', 'left', 'right', 'mid', 'z'])

@@ -1,7 +1,8 @@
 import 'fake-indexeddb/auto'
-import { afterEach, beforeEach, describe, expect, test } from 'vitest'
+import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest'
 import * as Y from 'yjs'
 import type { Operation } from '../../lib/sheet/change'
+import { CLOSE } from '../../lib/sheet/closeCodes'
 import { applyEdit } from '../../lib/sheet/edits'
 import { openIndexedDb } from '../../lib/sheet/outbox'
 import { readBudget, seedUpdate } from '../../lib/sheet/seed'
@@ -49,7 +50,7 @@ function elsewhere(operation: Operation, clientId: number) {
 }
 
 describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind) => {
-  test('[W2.3] 20 % of acknowledgements cut, reloads in between: every edit once, none lost', async () => {
+  test('[W2.63] 20 % of acknowledgements cut, reloads in between: every edit once, none lost', async () => {
     const seed = 20_240_611
     const random = seeded(seed)
     let cuts = 0
@@ -82,7 +83,7 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     expect(readBudget(server.doc).lines.via?.loss).toBe('59 dB')
   })
 
-  test('[W2.4] unsaved edits outlive a reload while the server is away, are shown, and are sent when it is back', async () => {
+  test('[W2.64] unsaved edits outlive a reload while the server is away, are shown, and are sent when it is back', async () => {
     const browser = browserWith(kind)
     const tab = await browser.openLive()
     server.script = () => 'cut before'
@@ -102,7 +103,7 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     expect(server.accepted.length).toBe(3)
   })
 
-  test('[W10.2] one refused edit among five made offline: the other four arrive, the refused one is shown as typed, also after a reload', async () => {
+  test('[W10.62] one refused edit among five made offline: the other four arrive, the refused one is shown as typed, also after a reload', async () => {
     const browser = browserWith(kind)
     const tab = await browser.openLive()
     server.script = () => 'cut before'
@@ -152,7 +153,7 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     ['lost against the unsent one', LOSES],
     ['won', WINS],
   ])(
-    '[W10.3] what hangs on a refused edit, and what others changed meanwhile (their write %s), is not done again but listed',
+    '[W10.63] what hangs on a refused edit, and what others changed meanwhile (their write %s), is not done again but listed',
     async (_, clientId) => {
       const browser = browserWith(kind)
       const tab = await browser.openLive()
@@ -179,7 +180,7 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     },
   )
 
-  test('[W2.5] a new epoch: the copy is dropped, the edits are done again on what the server has now', async () => {
+  test('[W2.65] a new epoch: the copy is dropped, the edits are done again on what the server has now', async () => {
     const browser = browserWith(kind)
     const tab = await browser.openLive()
     tab.edit([setLoss('1 dB')])
@@ -205,7 +206,7 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     expect(server.hellos.at(-1)?.epoch).toBe(2)
   })
 
-  test('[W2.6] two tabs: one sends for both, each sees the other, and the other sends when the first is gone', async () => {
+  test('[W2.66] two tabs: one sends for both, each sees the other, and the other sends when the first is gone', async () => {
     const browser = browserWith(kind)
     const first = await browser.openLive()
     const second = await browser.openLive()
@@ -234,7 +235,7 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     expect(before).toBe(2)
   })
 
-  test('[W10.4] a refusal in the tab that sends makes the other tab begin anew too; both show what was refused', async () => {
+  test('[W10.64] a refusal in the tab that sends makes the other tab begin anew too; both show what was refused', async () => {
     const browser = browserWith(kind)
     const first = await browser.openLive()
     const second = await browser.openLive()
@@ -250,7 +251,7 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     expect(server.accepted.length).toBe(1)
   })
 
-  test('[W2.7] a gap: what the server misses is sent first', async () => {
+  test('[W2.67] a gap: what the server misses is sent first', async () => {
     const browser = browserWith(kind)
     const tab = await browser.openLive()
     let told = false
@@ -269,7 +270,7 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     expect(readBudget(server.doc).lines.via?.loss).toBe('3 dB')
   })
 
-  test('[W2.8] a gap that nothing in the outbox fills (the server lost an edit): a new document, the edits done again', async () => {
+  test('[W2.68] a gap that nothing in the outbox fills (the server lost an edit): a new document, the edits done again', async () => {
     const browser = browserWith(kind)
     const tab = await browser.openLive()
     tab.edit([setLoss('1 dB')])
@@ -286,7 +287,7 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     expect(canonical(now.budget)).toBe(canonicalDoc(server.doc))
   })
 
-  test('[W10.5] made a viewer with edits unsaved: all of them are listed at once', async () => {
+  test('[W10.65] made a viewer with edits unsaved: all of them are listed at once', async () => {
     const browser = browserWith(kind)
     const tab = await browser.openLive()
     server.script = () => ({ code: 'read-only', reason: 'You may read this budget only.' })
@@ -294,6 +295,43 @@ describe.each(['memory', 'IndexedDB'] as const)('the outbox, kept in %s', (kind)
     const now = await until(tab, (next) => next.refused.length === 4 && next.unsaved === 0)
     expect(server.refusals.length).toBe(1)
     expect(now.refused.map((each) => each.parts[0]?.typed)).toEqual(['1 in', '2 in', '3 in', '4 in'])
+  })
+
+  test('[W10.70] signed out while an edit is on its way: it stays unsaved, and is sent after signing in', async () => {
+    const browser = browserWith(kind)
+    const tab = await browser.openLive()
+    server.script = () => {
+      server.closeAll(CLOSE.signInAgain.code)
+      return { code: 'not-allowed', reason: 'You are signed out; sign in again.' }
+    }
+    tab.edit([setLoss('1 dB')])
+    tab.edit([setLoss('2 dB')])
+    const now = await until(tab, (next) => next.connection.state === 'closed')
+    expect(now).toMatchObject({ unsaved: 2, refused: [], connection: { words: CLOSE.signInAgain.words } })
+    await tab.destroy()
+    server.script = () => null
+    await allSaved(await browser.openLive())
+    expect(readBudget(server.doc).lines.via?.loss).toBe('2 dB')
+    expect(server.accepted.length).toBe(2)
+  })
+
+  test('[W5.67] the server cannot write just now: the edit waits and is sent again, once the time has come', async () => {
+    const browser = browserWith(kind)
+    const tab = await browser.openLive()
+    vi.useFakeTimers({ toFake: ['setTimeout', 'clearTimeout'] })
+    try {
+      server.script = () => ({ code: 'not-stored', reason: 'The disk is full.' })
+      tab.edit([setLoss('1 dB')])
+      await vi.waitUntil(() => server.refusals.length === 1, { interval: 1 })
+      await vi.waitUntil(() => vi.getTimerCount() > 0, { interval: 1 })
+      expect(tab.getSnapshot()).toMatchObject({ unsaved: 1, refused: [], connection: { state: 'live' } })
+      server.script = () => null
+      vi.advanceTimersByTime(2000)
+    } finally {
+      vi.useRealTimers()
+    }
+    await allSaved(tab)
+    expect(server.accepted.length).toBe(1)
   })
 
   test('a reload uses the cache and asks only for what is new', async () => {

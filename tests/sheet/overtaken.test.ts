@@ -28,7 +28,7 @@ function receive(server: Y.Doc, update: Uint8Array) {
 describe('a write that arrives after another one of the same field', () => {
   const seed = Y.encodeStateAsUpdate(sampleDoc())
 
-  test('[W5.5] does not show if the other wins: overtaken, with what was written and what is kept', () => {
+  test('[W5.65] does not show if the other wins: overtaken, with what was written and what is kept', () => {
     const server = docOf(seed)
     const low = author(seed, 10)(loss('1 dB'))
     const high = author(seed, 20)(loss('2 dB'))
@@ -37,7 +37,7 @@ describe('a write that arrives after another one of the same field', () => {
     expect(readBudget(server).lines.via?.loss).toBe('2 dB')
   })
 
-  test('[W5.6] shows if it wins: its author had not seen what it replaced', () => {
+  test('[W5.66] shows if it wins: its author had not seen what it replaced', () => {
     const server = docOf(seed)
     const low = author(seed, 10)(loss('1 dB'))
     const high = author(seed, 20)(loss('2 dB'))

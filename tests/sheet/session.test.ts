@@ -4,6 +4,7 @@ import * as Y from 'yjs'
 import { CLOSE } from '../../lib/sheet/closeCodes'
 import { applyEdit } from '../../lib/sheet/edits'
 import { readBudget } from '../../lib/sheet/seed'
+import type { TrailEntry } from '../../lib/sheet/wire'
 import { FakeServer } from './fakeServer'
 import { canonical, canonicalDoc, docOf, sampleSeed } from './sample'
 import { allSaved, Browser, setLoss, until } from './tabs'
@@ -28,7 +29,7 @@ function elsewhere(operation: Parameters<typeof applyEdit>[1][number]) {
 }
 
 describe('a session', () => {
-  test('[W2.1] says hello before anything else and sends nothing upwards but what is its own', async () => {
+  test('[W2.61] says hello before anything else and sends nothing upwards but what is its own', async () => {
     const tab = await browser.openLive()
     tab.edit([setLoss('1 dB')])
     await allSaved(tab)
@@ -42,7 +43,7 @@ describe('a session', () => {
     expect(canonical(tab.getSnapshot().budget)).toBe(canonicalDoc(server.doc))
   })
 
-  test('[W2.2] an edit is shown at once, counted as unsaved with its place, and saved when it is acknowledged', async () => {
+  test('[W2.62] an edit is shown at once, counted as unsaved with its place, and saved when it is acknowledged', async () => {
     const tab = await browser.openLive()
     expect(tab.edit([setLoss('1 dB')])).toEqual({ ok: true })
     const now = tab.getSnapshot()
@@ -103,7 +104,7 @@ describe('a session', () => {
     expect(tab.getSnapshot()).toMatchObject({ unsaved: 0, canUndo: false })
   })
 
-  test('[W3.1] people present come from the server; the cell is told, also after a reconnect', async () => {
+  test('[W3.61] people present come from the server; the cell is told, also after a reconnect', async () => {
     const tab = await browser.openLive()
     expect((await until(tab, (now) => now.people.length > 0)).people[0]).toMatchObject({ name: 'A', me: true })
     const cell = { section: 'lines', id: 'via', field: 'loss' }
@@ -116,7 +117,28 @@ describe('a session', () => {
     expect(await again).toEqual([cell])
   })
 
-  test('[W10.9] told to reload again and again without a welcome, the page gives up and says so', async () => {
+  test('the trail grows at its head; what is sent twice is not doubled', async () => {
+    const tab = await browser.openLive()
+    const entry = (seq: number): TrailEntry => ({
+      seq,
+      epoch: 1,
+      kind: 'edit',
+      editId: `e${seq}`,
+      person: 'ben',
+      personName: 'B',
+      door: 'screen',
+      time: seq,
+      changes: [],
+      effects: [],
+      hash: `h${seq}`,
+    })
+    server.tell([entry(1), entry(2)])
+    server.tell([entry(2), entry(3)])
+    const now = await until(tab, (next) => next.trail.length === 3)
+    expect(now.trail.map((each) => each.seq)).toEqual([3, 2, 1])
+  })
+
+  test('[W10.69] told to reload again and again without a welcome, the page gives up and says so', async () => {
     const tab = await browser.openLive()
     server.neverWelcome = true
     server.closeAll(CLOSE.reload.code)
@@ -125,7 +147,7 @@ describe('a session', () => {
     expect(server.connections).toBe(4)
   })
 
-  test('[W2.12] a tab that is closed for good lets another one send', async () => {
+  test('[W2.72] a tab that is closed for good lets another one send', async () => {
     const first = await browser.openLive()
     const second = await browser.openLive()
     server.closeFirst(CLOSE.slowHello.code)
@@ -141,7 +163,7 @@ describe('a session', () => {
     ['message too big', 1009, 'closed'],
     ['server restarts', CLOSE.restart.code, 'offline'],
     ['disk trouble', CLOSE.notReady.code, 'offline'],
-  ])('[W10.1] %s: close code %i leaves the session %s', async (_name, code, state) => {
+  ])('[W10.61] %s: close code %i leaves the session %s', async (_name, code, state) => {
     const tab = await browser.openLive()
     server.closeAll(code)
     const now = await until(tab, (next) => next.connection.state !== 'live')

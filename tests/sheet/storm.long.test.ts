@@ -14,7 +14,7 @@ const LINES = ['package', 'trace', 'via']
  * At the end everybody has the server's document, and every line that was added is in it or in its author's refused list.
  */
 test.each(Array.from({ length: Number(process.env.HALFBAUD_SEEDS ?? 20) }, (_, index) => index + 1))(
-  '[W2.11] a storm, seed %i: everybody ends with the same budget, no edit is lost, none comes twice',
+  '[W2.71] a storm, seed %i: everybody ends with the same budget, no edit is lost, none comes twice',
   async (seed) => {
     const random = seeded(seed)
     const pick = <T>(from: readonly T[]): T => from[Math.floor(random() * from.length)] as T

@@ -53,7 +53,7 @@ function exchange(...people: Person[]) {
 }
 
 describe('undo', () => {
-  test('[W1.10] one committed edit is one step, back and forth', () => {
+  test('[W1.70] one committed edit is one step, back and forth', () => {
     const { left } = pair()
     const before = canonicalDoc(left.doc)
     left.edit(set('loss', '1 dB'), set('stub', '0.2 mm'), note('Back-drilled twice'))
@@ -72,7 +72,7 @@ describe('undo', () => {
     expect(left.undo.canRedo).toBe(false)
   })
 
-  test('[W1.11] its update is an ordinary edit: others who apply it have the same document; it says what was done', () => {
+  test('[W1.71] its update is an ordinary edit: others who apply it have the same document; it says what was done', () => {
     const { left, right } = pair()
     left.edit(set('loss', '1 dB'), note('Back-drilled twice'), {
       op: 'lane',
@@ -94,7 +94,7 @@ describe('undo', () => {
     expect(readBudget(right.doc).laneValues['trace/4/skew']).toBeNull()
   })
 
-  test('[W1.12] an added line that somebody else wrote into: undo hides it, nothing is lost, redo shows it again', () => {
+  test('[W1.72] an added line that somebody else wrote into: undo hides it, nothing is lost, redo shows it again', () => {
     const { left, right } = pair()
     left.edit({ op: 'add', section: 'lines', id: 'pad', values: { order: 'a3', name: 'Pad' } })
     exchange(left, right)
@@ -108,7 +108,7 @@ describe('undo', () => {
     expect(readBudget(right.doc).lines.pad).toMatchObject({ removed: false, loss: '7 dB', name: 'Pad' })
   })
 
-  test('[W1.12] a removed line that somebody else wrote into: undo brings it back with what they wrote', () => {
+  test('[W1.72] a removed line that somebody else wrote into: undo brings it back with what they wrote', () => {
     const { left, right } = pair()
     left.edit(set('removed', true))
     right.edit(set('loss', '33 dB'))
@@ -118,7 +118,7 @@ describe('undo', () => {
     expect(right.via()).toMatchObject({ removed: false, loss: '33 dB' })
   })
 
-  test('[W1.13] what somebody else wrote since stays; the step is used up and no older one is undone in its place', () => {
+  test('[W1.73] what somebody else wrote since stays; the step is used up and no older one is undone in its place', () => {
     const { left, right } = pair()
     left.edit(set('name', 'Renamed'))
     left.edit(set('loss', '5 dB'))
@@ -132,7 +132,7 @@ describe('undo', () => {
     expect(left.via()?.name).toBe('Via')
   })
 
-  test('[W1.14] a write that overtook another one: undo leaves the field in the record, with what stood before', () => {
+  test('[W1.74] a write that overtook another one: undo leaves the field in the record, with what stood before', () => {
     const { left, right } = pair(20, 10)
     left.edit(set('loss', '5 dB'))
     right.edit(set('loss', '7 dB'))
@@ -144,7 +144,7 @@ describe('undo', () => {
     expect(right.via()?.loss).toBeNull()
   })
 
-  test('[W1.15] typing in a note is taken back character by character, what others typed around it stays', () => {
+  test('[W1.75] typing in a note is taken back character by character, what others typed around it stays', () => {
     const { left, right } = pair()
     left.edit(note('Back-drilled from the top'))
     exchange(left, right)

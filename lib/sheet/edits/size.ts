@@ -3,7 +3,7 @@ import type { Operation } from '../change'
 import { fieldsOf } from '../layout'
 
 /** More bytes than Yjs spends on the ids, lengths and marks of one written entry. */
-const PER_WRITE = 64
+const PER_WRITE = 40
 
 /** An upper bound of the bytes of the update that these operations make, found without making it. */
 export function editSize(operations: readonly Operation[]): number {
@@ -27,7 +27,8 @@ function operationSize(operation: Operation): number {
   }
 }
 
-/** UTF-8 takes at most 3 bytes for one UTF-16 code unit. */
 function bytes(value: Scalar): number {
-  return typeof value === 'string' ? 3 * value.length : 10
+  if (typeof value !== 'string') return 10
+  // UTF-8 takes at most 3 bytes for one UTF-16 code unit; most of what is typed here is ASCII.
+  return /[^\0-\x7f]/.test(value) ? 3 * value.length : value.length
 }

@@ -95,6 +95,9 @@ export class Sender {
         this.hooks.renew(NEW_EPOCH)
         return
       case 'not-allowed':
+        // Signed out, or no longer a member: the edits wait for the next time that this person is let in.
+        this.live = false
+        return
       case 'read-only':
         // No other edit will fare better.
         this.giveUp(this.outbox.records, refusal)
