@@ -74,10 +74,9 @@ describe('who may open a worksheet', () => {
   })
 
   it('[W2.21] nothing is answered before the hello, and it has ten seconds, whatever else is sent', async () => {
-    const timers = heldTimers()
+    const timers = heldTimers(100)
     const world = await openWorld({ timers })
-    const creating = world.createBudget()
-    const budget = await turning(timers, creating)
+    const budget = await world.createBudget()
     const page = await Page.dial(`${world.url}${budget}`, { headers: cookie('ann'), origin: PUBLIC_URL })
     page.askForDocument()
     page.send(encodeMessage({ type: MESSAGE.cell, header: null }))
@@ -271,11 +270,11 @@ describe('presence', () => {
   })
 
   it('[W3.27] 70 s without anything happening: still a message every 15 s, so no page thinks it is cut off', async () => {
-    const timers = heldTimers()
+    const timers = heldTimers(100)
     const world = await openWorld({ timers })
-    const budget = await turning(timers, world.createBudget())
+    const budget = await world.createBudget()
     const ann = await Page.open(world, budget, 'ann')
-    await turning(timers, ann.answer(ann.edit(setLoss('6 dB'))))
+    await ann.answer(ann.edit(setLoss('6 dB')))
     await ann.until((one) => one.type === 'trail')
     const before = ann.received.length
     for (let step = 1; step <= 4; step++) {
@@ -291,9 +290,9 @@ describe('presence', () => {
   })
 
   it('[W3.26] a session that expires without anybody saying so is noticed within 15 s', async () => {
-    const timers = heldTimers()
+    const timers = heldTimers(100)
     const world = await openWorld({ timers })
-    const budget = await turning(timers, world.createBudget())
+    const budget = await world.createBudget()
     const ann = await Page.open(world, budget, 'ann')
     world.sessions.expire('session-ann')
     timers.advance(15_000)
@@ -315,17 +314,4 @@ async function arrived(page: Page): Promise<void> {
     page.socket.once('pong', resolve)
     page.socket.ping()
   })
-}
-
-/** Lets held time run until something is done. */
-async function turning<T>(timers: ReturnType<typeof heldTimers>, doing: Promise<T>): Promise<T> {
-  let isDone = false
-  const done = doing.finally(() => {
-    isDone = true
-  })
-  while (!isDone) {
-    timers.advance(1)
-    await new Promise((resolve) => setImmediate(resolve))
-  }
-  return done
 }

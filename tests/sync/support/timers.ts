@@ -1,7 +1,10 @@
-import type { Timers } from '../../../lib/sync/clock'
+import { systemTimers, type Timers } from '../../../lib/sync/clock'
 
-/** Timers that go when the test says so. */
-export function heldTimers(): Timers & { now(): number; advance(milliseconds: number): void } {
+/**
+ * Timers that go when the test says so.
+ * @param realUpTo delays up to this many milliseconds pass by themselves: a commit gathers for 5 ms
+ */
+export function heldTimers(realUpTo = 0): Timers & { now(): number; advance(milliseconds: number): void } {
   let now = 1_800_000_000_000
   const due = new Set<{ at: number; every: number | null; run: () => void }>()
   const add = (delay: number, every: number | null, run: () => void) => {
@@ -13,7 +16,7 @@ export function heldTimers(): Timers & { now(): number; advance(milliseconds: nu
   }
   return {
     now: () => now,
-    after: (delay, run) => add(delay, null, run),
+    after: (delay, run) => (delay <= realUpTo ? systemTimers.after(delay, run) : add(delay, null, run)),
     every: (interval, run) => add(interval, interval, run),
     advance(milliseconds) {
       const until = now + milliseconds
