@@ -28,7 +28,7 @@ export function evaluate(budget: Budget, _evidence: EvidenceData): Evaluation {
     items,
     rows: rowsOf(budget, items),
     lanes: lanesOf(budget, items),
-    losses: new Losses(typedValue(RESISTANCE, budget.head.reference), signalling.mistake),
+    losses: new Losses(typedValue(RESISTANCE, budget.head.reference), signalling),
     referenceTemperature: typedValue(TEMPERATURE, budget.head.referenceTemperature),
   }
   const judged = inOrder(budget, 'allowances').map(([id, allowance]) => judge(context, id, allowance))

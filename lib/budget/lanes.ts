@@ -1,10 +1,7 @@
 import type { FlagDraft } from './flags'
-import { itemOf, type LineItem } from './lineItem'
+import { itemInLane, type LaneFields, type LineItem } from './lineItem'
 import { nameOf } from './record'
-import type { Budget, LANE_FIELDS, Line } from './schema'
-
-/** What one lane says instead of its line. */
-type LaneFields = Partial<Pick<Line, (typeof LANE_FIELDS)[number]>>
+import type { Budget } from './schema'
 
 /** The lanes of a link and what they say instead of their lines. */
 export type Lanes = {
@@ -35,7 +32,7 @@ export function lanesOf(budget: Budget, items: readonly LineItem[]): Lanes {
     if (!ofLine) continue
     const lanes = new Map<number, LineItem>()
     for (const [lane, fields] of ofLine) {
-      if (lane <= count) lanes.set(lane, itemOf(budget, item.id, { ...item.line, ...fields }, lane))
+      if (lane <= count) lanes.set(lane, itemInLane(budget, item, lane, fields))
     }
     const beyond = [...ofLine.keys()].filter((lane) => lane > count).sort((a, b) => a - b)
     if (beyond.length > 0) drafts.push(beyondCount(item, beyond, count))

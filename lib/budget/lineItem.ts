@@ -1,5 +1,15 @@
+import { contentName } from './contentName'
 import { inOrder, livingRecord } from './record'
-import type { Assembly, Basis, Budget, Grade, Line, LossClass, Owner } from './schema'
+import {
+  type Assembly,
+  type Basis,
+  type Budget,
+  type Grade,
+  LANE_FIELDS,
+  type Line,
+  type LossClass,
+  type Owner,
+} from './schema'
 
 /** A line with the records that it rests on. */
 export type LineItem = {
@@ -10,20 +20,37 @@ export type LineItem = {
   readonly assembly: Assembly | null
   /** The loss class, where the line's model uses one. */
   readonly lossClass: LossClass | null
+  /** A name of what the line and its loss class say: the same content, the same name. */
+  readonly content: string
 }
+
+/** What one lane says instead of its line. */
+export type LaneFields = Partial<Pick<Line, (typeof LANE_FIELDS)[number]>>
 
 export function lineItems(budget: Budget): LineItem[] {
-  return inOrder(budget, 'lines').map(([id, line]) => itemOf(budget, id, line, null))
+  return inOrder(budget, 'lines').map(([id, line]) => {
+    const assembly = livingRecord(budget, 'assemblies', line.assembly)
+    const lossClass = lossClassOf(budget, line)
+    const content = `${contentName(`lines/${id}`, line)}|${classContent(line, lossClass)}`
+    return { id, line, lane: null, assembly, lossClass, content }
+  })
 }
 
-export function itemOf(budget: Budget, id: string, line: Line, lane: number | null): LineItem {
-  return {
-    id,
-    line,
-    lane,
-    assembly: livingRecord(budget, 'assemblies', line.assembly),
-    lossClass: line.model === 'class' ? livingRecord(budget, 'lossClasses', line.lossClass) : null,
-  }
+/** The line with the values of one lane. */
+export function itemInLane(budget: Budget, item: LineItem, lane: number, fields: LaneFields): LineItem {
+  const line = { ...item.line, ...fields }
+  const lossClass = fields.lossClass === undefined ? item.lossClass : lossClassOf(budget, line)
+  const differing = LANE_FIELDS.map((field) => fields[field] ?? '').join(';')
+  const content = `${item.content}|${differing}|${fields.lossClass === undefined ? '' : classContent(line, lossClass)}`
+  return { ...item, line, lane, lossClass, content }
+}
+
+function lossClassOf(budget: Budget, line: Line): LossClass | null {
+  return line.model === 'class' ? livingRecord(budget, 'lossClasses', line.lossClass) : null
+}
+
+function classContent(line: Line, lossClass: LossClass | null): string {
+  return lossClass === null ? '' : contentName(`lossClasses/${line.lossClass}`, lossClass)
 }
 
 export function ownerOf({ line, assembly }: LineItem): Owner | null {

@@ -1,29 +1,33 @@
+import { contentName } from './contentName'
 import type { Conditions } from './corner'
 import type { LineItem } from './lineItem'
-import type { LineLoss } from './lineLoss'
+import { type LineLoss, lineLoss } from './lineLoss'
 import { rememberedLoss } from './lossMemory'
+import type { Signalling } from './signalling'
 
-/** The losses that one evaluation asks for: each line, in each of its lanes, once per frequency and corner. */
+/** The losses that one evaluation asks for: each line, in each of its lanes, at a frequency and in a corner. */
 export class Losses {
-  private readonly known = new Map<
-    LineItem,
-    { readonly hz: number; readonly corner: Conditions | null; readonly loss: LineLoss }[]
-  >()
+  private readonly corners = new Map<Conditions | null, string>()
 
   constructor(
     /** Ω, differential; null where the budget does not say it. */
     private readonly reference: number | null,
-    /** Continues 'this is …' where a frequency is a well-known mistake for the Nyquist frequency, else null. */
-    private readonly mistake: (hz: number) => string | null,
+    private readonly signalling: Signalling,
   ) {}
 
   at(item: LineItem, hz: number, corner: Conditions | null): LineLoss {
-    const ofItem = this.known.get(item)
-    const found = ofItem?.find((one) => one.hz === hz && one.corner === corner)
-    if (found) return found.loss
-    const loss = rememberedLoss(item, { hz, reference: this.reference, corner, mistake: this.mistake })
-    if (ofItem) ofItem.push({ hz, corner, loss })
-    else this.known.set(item, [{ hz, corner, loss }])
-    return loss
+    const content = `${item.content}|${hz}|${this.conditions(corner)}`
+    const { reference } = this
+    const { mistake } = this.signalling
+    return rememberedLoss(content, () => lineLoss(item, { hz, reference, corner, mistake }))
+  }
+
+  /** A name of what the loss depends on beside the line and the frequency. */
+  private conditions(corner: Conditions | null): string {
+    const known = this.corners.get(corner)
+    if (known !== undefined) return known
+    const name = `${this.reference}|${this.signalling.content}|${corner === null ? '' : contentName('corner', corner)}`
+    this.corners.set(corner, name)
+    return name
   }
 }

@@ -1,11 +1,14 @@
 import { LEVELS, type Overhead, type RateInput, type Rates, ratesOf, usualMistake } from '../channel/signalling'
 import { formatScaled } from '../channel/units'
+import { contentName } from './contentName'
 import type { SignallingEvaluation } from './evaluation'
 import type { FlagDraft } from './flags'
 import { headFlag, readRate } from './rate'
 import type { Head } from './schema'
 
 export type Signalling = {
+  /** A name of what the head says about it: the same content, the same name. */
+  readonly content: string
   readonly evaluation: SignallingEvaluation
   /** Continues 'this is …' where a frequency is a well-known mistake for the Nyquist frequency, else null. */
   readonly mistake: (hz: number) => string | null
@@ -15,28 +18,18 @@ export type Signalling = {
 const KEPT = 64
 const kept = new Map<string, Signalling>()
 
-/** The link's signalling, from what the head says. The same head is computed once, so that its result can be compared by identity. */
+/** The link's signalling, from what the head says. The same head is computed once. */
 export function signallingOf(head: Head): Signalling {
-  const key = JSON.stringify([
-    head.bitRate,
-    head.rateType,
-    head.code,
-    head.codedBits,
-    head.codedSymbols,
-    head.codingBits,
-    head.codingLineBits,
-    head.fecMessage,
-    head.fecCodeword,
-  ])
-  const known = kept.get(key)
+  const content = contentName('head', head)
+  const known = kept.get(content)
   if (known) return known
   if (kept.size >= KEPT) kept.clear()
-  const result = compute(head)
-  kept.set(key, result)
+  const result = compute(head, content)
+  kept.set(content, result)
   return result
 }
 
-function compute(head: Head): Signalling {
+function compute(head: Head, content: string): Signalling {
   const drafts: FlagDraft[] = []
   const input = readRate(head, drafts)
   const rates = input && ratesOf(input)
@@ -50,8 +43,9 @@ function compute(head: Head): Signalling {
       ),
     )
   }
-  if (!input || !rates) return { evaluation: UNKNOWN, mistake: () => null, drafts }
+  if (!input || !rates) return { content, evaluation: UNKNOWN, mistake: () => null, drafts }
   return {
+    content,
     evaluation: {
       lineRate: rates.lineRate,
       bitsPerSymbol: rates.bitsPerSymbol,

@@ -26,23 +26,34 @@ export function laneSums(
   conditions: JudgedConditions,
   atHz: number | null,
 ): LaneSum[] {
-  const between = new Set(span.items.map(({ id }) => id))
   const named = conditions.problem === null ? allowance.judgedLane : null
   const numbers = named === null ? distinctLanes(context.lanes, span.items) : [named]
-  const signs = span.items.map((item) => signOf(context, item, between))
-  const inLanes = (number: number, corner: Conditions | null) =>
-    span.items.map((own, index): Counted => {
-      const item = inLane(context.lanes, own, number)
-      const sign = signs[index] ?? 'unnamed'
-      if (sign === 'unnamed') return { item, sign: -1, loss: NO_NUMBER }
-      return { item, sign, loss: atHz === null ? NO_NUMBER : context.losses.at(item, atHz, corner) }
-    })
+  const inCorner = laneCounter(context, span, conditions.corner, atHz)
+  const inReference = laneCounter(context, span, null, atHz)
   return numbers.map((number) => {
-    const lines = inLanes(number, conditions.corner)
+    const lines = inCorner(number)
     const cornerUnknown = lines.find(({ loss }) => loss.cornerUnknown !== null)?.loss.cornerUnknown ?? null
-    const shown = cornerUnknown === null ? lines : inLanes(number, null)
+    const shown = cornerUnknown === null ? lines : inReference(number)
     return { number, lines: shown, sum: sumOf(shown), cornerUnknown }
   })
+}
+
+/** What each line counts in a lane. Lines without values of their own in a lane are looked up once for all lanes. */
+function laneCounter(context: Context, span: Span, corner: Conditions | null, atHz: number | null) {
+  const between = new Set(span.items.map(({ id }) => id))
+  const count = (own: LineItem, item: LineItem): Counted => {
+    const sign = signOf(context, own, between)
+    if (sign === 'unnamed') return { item, sign: -1, loss: NO_NUMBER }
+    return { item, sign, loss: atHz === null ? NO_NUMBER : context.losses.at(item, atHz, corner) }
+  }
+  const alike: Counted[] = []
+  return (lane: number): Counted[] =>
+    span.items.map((own, index) => {
+      const item = inLane(context.lanes, own, lane)
+      if (item !== own) return count(own, item)
+      alike[index] ??= count(own, own)
+      return alike[index]
+    })
 }
 
 const NO_NUMBER: LineLoss = {
