@@ -8,7 +8,6 @@ const config = {
     'y-protocols',
     'lib0',
     'y-websocket',
-    'y-indexeddb',
     'better-sqlite3',
     'sqlite3',
     '@prisma/client',
