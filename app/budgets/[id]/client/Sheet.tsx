@@ -16,7 +16,7 @@ import { OpenLine } from './rows/OpenLine'
 import { Rows } from './rows/Rows'
 import css from './sheet.module.css'
 import { formDraft } from './slips/FieldSlip'
-import { useBench, useReading, ViewContext } from './state/contexts'
+import { LookContext, useBench, useReading, ViewContext } from './state/contexts'
 import { placeOf } from './state/focusPlace'
 import type { SheetState } from './state/sheet'
 import type { FirstState } from './state/useSheet'
@@ -38,7 +38,7 @@ export function Sheet({ first, state, kept, stand }: Props) {
   const bench = useBench()
   const root = useRef<HTMLDivElement>(null)
   const verdicts = useRef<HTMLDivElement>(null)
-  const view = useViewState(first.budgetId, evaluation, root, kept)
+  const { view, look } = useViewState(first.budgetId, evaluation, root, kept)
   const { trail, people } = state
   const was = useWas({ trail, people, budget, person: first.person, allowance: view.allowance })
 
@@ -48,7 +48,7 @@ export function Sheet({ first, state, kept, stand }: Props) {
     if (!place) return
     stand?.(place)
     const { section, id } = place
-    if (id !== null && (section === 'lines' || section === 'planes')) view.select({ section, id })
+    if (id !== null && (section === 'lines' || section === 'planes')) look.select({ section, id })
   }
   const onBlur = () => {
     kept.focus.current = null
@@ -67,40 +67,42 @@ export function Sheet({ first, state, kept, stand }: Props) {
 
   return (
     <ViewContext value={view}>
-      <section
-        ref={root}
-        aria-label="Worksheet"
-        className={css.sheet}
-        onFocus={onFocus}
-        onBlur={onBlur}
-        onKeyDown={onKeyDown}
-      >
-        <Head state={state} glance={useOutOfSight(verdicts)} />
-        <div aria-live="assertive">
-          <RefusedList refused={state.refused} />
-        </div>
-        <div ref={verdicts} className={css.verdicts}>
-          <Headlines />
-          <Proof />
-        </div>
-        <Signalling />
-        <Picture people={people} was={was} />
-        <div className={css.bench}>
-          <div className={css.rows}>
-            <Rows />
-            <OpenLine />
-            <KeysHelp />
-            <TakenOut section="lines" />
-            <TakenOut section="planes" />
+      <LookContext value={look}>
+        <section
+          ref={root}
+          aria-label="Worksheet"
+          className={css.sheet}
+          onFocus={onFocus}
+          onBlur={onBlur}
+          onKeyDown={onKeyDown}
+        >
+          <Head state={state} glance={useOutOfSight(verdicts)} />
+          <div aria-live="assertive">
+            <RefusedList refused={state.refused} />
           </div>
-          <div className={css.beside}>
-            <Detail />
-            <TrailPanel recent={trail} />
+          <div ref={verdicts} className={css.verdicts}>
+            <Headlines />
+            <Proof />
           </div>
-        </div>
-        <FlagsPanel />
-        <Tables />
-      </section>
+          <Signalling />
+          <Picture people={people} was={was} />
+          <div className={css.bench}>
+            <div className={css.rows}>
+              <Rows />
+              <OpenLine />
+              <KeysHelp />
+              <TakenOut section="lines" />
+              <TakenOut section="planes" />
+            </div>
+            <div className={css.beside}>
+              <Detail />
+              <TrailPanel recent={trail} />
+            </div>
+          </div>
+          <FlagsPanel />
+          <Tables />
+        </section>
+      </LookContext>
     </ViewContext>
   )
 }

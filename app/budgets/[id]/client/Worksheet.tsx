@@ -1,14 +1,16 @@
 'use client'
-import { useCallback, useMemo, useState } from 'react'
+import { useCallback, useLayoutEffect, useMemo, useState } from 'react'
 import { roleAllows } from '../../../../lib/sheet/roles'
+import type { Present } from '../../../../lib/sheet/wire'
 import { Announcer } from './head/Announcer'
 import { Sheet } from './Sheet'
-import { type Bench, BenchContext, OthersContext, ReadingContext, UnsavedContext } from './state/contexts'
+import { type Bench, BenchContext, ReadingContext } from './state/contexts'
 import { createDrafts } from './state/drafts'
 import { evaluated } from './state/evaluated'
+import { othersByPlace } from './state/othersByPlace'
+import { createPlaceMap } from './state/placeMap'
 import { createRoving } from './state/roving'
 import { useAnnouncement } from './state/useAnnouncement'
-import { useOthers } from './state/useOthers'
 import { type FirstState, useSheet } from './state/useSheet'
 import { useKept } from './state/useView'
 
@@ -23,7 +25,13 @@ export function Worksheet({ first }: { first: FirstState }) {
   const kept = useKept()
   const [refusal, setRefusal] = useState<string | null>(null)
   const said = useAnnouncement(state.trail, first.person, state.budget)
-  const others = useOthers(state.people)
+  const [standing] = useState(createPlaceMap<readonly Present[]>)
+  const [unsaved] = useState(createPlaceMap<true>)
+  useLayoutEffect(() => standing.replace(othersByPlace(state.people)), [standing, state.people])
+  useLayoutEffect(
+    () => unsaved.replace(new Map([...state.unsavedPlaces].map((place) => [place, true]))),
+    [unsaved, state.unsavedPlaces],
+  )
   const canWrite = deeds !== null && roleAllows(state.role, 'editor') && state.connection.state !== 'closed'
 
   const tell = useCallback((reason: string | null) => {
@@ -36,31 +44,29 @@ export function Worksheet({ first }: { first: FirstState }) {
       canWrite,
       drafts,
       roving,
+      standing,
+      unsaved,
       read: () => deeds?.read() ?? firstBudget,
       edit: (operations) => (deeds ? deeds.edit(operations) : NOT_YET),
       act: (operations) => tell(deeds ? deeds.edit(operations) : NOT_YET),
       undo: () => tell(deeds ? deeds.undo() : NOT_YET),
       redo: () => tell(deeds ? deeds.redo() : NOT_YET),
     }),
-    [canWrite, drafts, roving, deeds, firstBudget, tell],
+    [canWrite, drafts, roving, standing, unsaved, deeds, firstBudget, tell],
   )
   const reading = useMemo(() => ({ budget: state.budget, evaluation: evaluated(state.budget) }), [state.budget])
 
   return (
     <ReadingContext value={reading}>
       <BenchContext value={bench}>
-        <UnsavedContext value={state.unsavedPlaces}>
-          <OthersContext value={others}>
-            <Sheet
-              key={Math.max(1, state.generation)}
-              first={first}
-              state={state}
-              kept={kept}
-              stand={deeds?.stand ?? null}
-            />
-            <Announcer said={said} refusal={refusal} onHeard={() => setRefusal(null)} />
-          </OthersContext>
-        </UnsavedContext>
+        <Sheet
+          key={Math.max(1, state.generation)}
+          first={first}
+          state={state}
+          kept={kept}
+          stand={deeds?.stand ?? null}
+        />
+        <Announcer said={said} refusal={refusal} onHeard={() => setRefusal(null)} />
       </BenchContext>
     </ReadingContext>
   )

@@ -1,20 +1,21 @@
 'use client'
-import { useContext } from 'react'
 import { COVER_CODES, COVERS, type Line, sortedSet } from '../../../../../lib/budget/schema'
 import { setField } from '../deeds/records'
 import { Standing, standingColour } from '../slips/Aside'
 import slips from '../slips/slips.module.css'
-import { OthersContext, UnsavedContext, useBench } from '../state/contexts'
+import { useBench } from '../state/contexts'
+import { usePlace } from '../state/usePlace'
 import { wordOf } from '../words/choices'
 import css from './detail.module.css'
 import { Group } from './Group'
 
 /** What the number includes, from the set of its kind. Nothing ticked can mean 'nothing else', and that must be said. */
 export function Covers({ id, line }: { id: string; line: Line }) {
-  const { canWrite, act } = useBench()
+  const bench = useBench()
+  const { canWrite, act } = bench
   const key = `lines/${id}/covers`
-  const others = useContext(OthersContext).get(key) ?? []
-  const unsaved = useContext(UnsavedContext).has(key)
+  const others = usePlace(bench.standing, key) ?? []
+  const unsaved = usePlace(bench.unsaved, key)
   const known: readonly string[] = line.kind ? COVERS[line.kind] : []
   const ticked = line.covers?.split(' ').filter(Boolean) ?? []
   const codes = [...known, ...ticked.filter((code) => !known.includes(code))]

@@ -1,6 +1,6 @@
 'use client'
 import { type KeyboardEvent, useEffect, useRef } from 'react'
-import { useReading, useView } from '../state/contexts'
+import { useLook, useReading, useView } from '../state/contexts'
 import css from './detail.module.css'
 import { LineDetail } from './LineDetail'
 import { PlaneDetail } from './PlaneDetail'
@@ -8,7 +8,8 @@ import { PlaneDetail } from './PlaneDetail'
 /** Everything about the selected line or plane: beside the rows, or a sheet from below where there is no room. */
 export function Detail() {
   const { budget } = useReading()
-  const { selected, detailOpen, openDetail, goTo } = useView()
+  const { selected, detailOpen } = useView()
+  const { openDetail, goTo } = useLook()
   const sheet = useRef<HTMLElement>(null)
   useEffect(() => {
     if (detailOpen && isSheet(sheet.current)) sheet.current?.focus()

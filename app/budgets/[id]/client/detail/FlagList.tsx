@@ -1,13 +1,13 @@
 'use client'
 import type { SectionName } from '../../../../../lib/budget/schema'
-import { useReading, useView } from '../state/contexts'
+import { useLook, useReading } from '../state/contexts'
 import { labelOf } from '../words/labels'
 import css from './detail.module.css'
 
 /** What to look at on one record, with what to do about it. */
 export function FlagList({ section, id }: { section: SectionName; id: string }) {
   const { evaluation } = useReading()
-  const { goTo } = useView()
+  const { goTo } = useLook()
   const flags = evaluation.flags.filter((flag) => flag.section === section && flag.id === id)
   if (flags.length === 0) return null
   return (

@@ -1,7 +1,7 @@
 'use client'
 import type { Scalar } from '../../../../../lib/budget/schema'
 import { addRow, moveRow, removeRow, restoreRow } from '../deeds/channel'
-import { type Selected, useBench, useView } from '../state/contexts'
+import { type Selected, useBench, useLook } from '../state/contexts'
 import css from './detail.module.css'
 
 type Props = { readonly row: Selected; readonly removed: boolean; readonly assembly: Scalar }
@@ -9,7 +9,7 @@ type Props = { readonly row: Selected; readonly removed: boolean; readonly assem
 /** What can be done with a row as a whole, for those without the keys. */
 export function RowDeeds({ row, removed, assembly }: Props) {
   const { canWrite, act, read } = useBench()
-  const { goTo } = useView()
+  const { goTo } = useLook()
   if (!canWrite) return null
   const add = () => {
     const added = addRow(read(), row.id, { section: 'lines', values: { assembly } })

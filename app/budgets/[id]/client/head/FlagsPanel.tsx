@@ -1,6 +1,6 @@
 'use client'
 import type { Flag } from '../../../../../lib/budget/evaluation'
-import { useReading, useView } from '../state/contexts'
+import { useLook, useReading } from '../state/contexts'
 import { RECORD_WORDS } from '../words/labels'
 import { recordName } from '../words/say'
 import css from './flags.module.css'
@@ -15,7 +15,7 @@ const WORD: Readonly<Record<Flag['severity'], string>> = {
 /** What to look at in the whole budget, the heaviest first, each with what to do and the way there. */
 export function FlagsPanel() {
   const { budget, evaluation } = useReading()
-  const { goTo } = useView()
+  const { goTo } = useLook()
   const flags = ORDER.flatMap((severity) => evaluation.flags.filter((flag) => flag.severity === severity))
   return (
     <section className={css.panel} aria-labelledby="flags-title">

@@ -16,8 +16,8 @@ export function Head({ state, glance }: { state: SheetState; glance: boolean }) 
   const name = budget.head.name ?? 'Budget without a name'
   return (
     <header className={css.head} data-compact={glance || undefined}>
+      <h1 className={css.unseen}>{name}</h1>
       <div className={css.title}>
-        <h1 className={css.unseen}>{name}</h1>
         <FieldSlip spec={fieldSlip('head', null, 'name', budget.head.name)} hideLabel of="the budget" />
       </div>
       {glance && <Glance />}

@@ -4,7 +4,7 @@ import { VerdictMark } from '../../../../marks/VerdictMark'
 import { decibels, frequencyWords } from '../../../../words/decibels'
 import { headline, judgedWords } from '../../../../words/judged'
 import { planeWords } from '../../../../words/terms'
-import { useReading, useView } from '../state/contexts'
+import { useLook, useReading } from '../state/contexts'
 import css from './head.module.css'
 
 /** The verdict of each allowance: mark, margin, words, and the conditions that it is judged at. */
@@ -27,7 +27,7 @@ function Headline({ allowance }: { allowance: AllowanceEvaluation }) {
   // The words name the first reasons themselves.
   const reasons = allowance.reasons.filter((reason) => !allowance.words.includes(reason))
   return (
-    <section className={css.headline} aria-label={allowance.name || 'Allowance without a name'}>
+    <section className={css.headline} aria-label={`Verdict of ${allowance.name || 'an allowance without a name'}`}>
       <p className={css.margin}>
         <VerdictMark verdict={verdict} size={28} stacked />
         <span className={`${css.marginFigure} ${css[verdict]}`}>{figure}</span>
@@ -67,7 +67,7 @@ function span({ from, to, atHz }: AllowanceEvaluation, budget: ReturnType<typeof
 }
 
 function NoAllowance() {
-  const { goTo } = useView()
+  const { goTo } = useLook()
   return (
     <div className={css.headline}>
       <p className={css.margin}>

@@ -3,13 +3,14 @@ import { BasisStroke } from '../../../../marks/BasisStroke'
 import { TypicalWave } from '../../../../marks/TypicalWave'
 import { decibels } from '../../../../words/decibels'
 import { BASIS_WORD, PROOF_ORDER } from '../../../../words/terms'
-import { useReading, useView } from '../state/contexts'
+import { useLook, useReading, useView } from '../state/contexts'
 import css from './head.module.css'
 
 /** How proven the loss of the allowance in view is: decibels by basis, and the lines that are only typical, by name. */
 export function Proof() {
   const { budget, evaluation } = useReading()
-  const { allowance: inView, goTo } = useView()
+  const { allowance: inView } = useView()
+  const { goTo } = useLook()
   const allowance = evaluation.allowances.find(({ id }) => id === inView)
   if (!allowance) return null
   const shown = PROOF_ORDER.filter((basis) => allowance.byBasis[basis] !== 0)

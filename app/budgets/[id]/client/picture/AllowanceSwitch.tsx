@@ -1,13 +1,14 @@
 'use client'
 import { VerdictMark } from '../../../../marks/VerdictMark'
 import { judgedWords } from '../../../../words/judged'
-import { useReading, useView } from '../state/contexts'
+import { useLook, useReading, useView } from '../state/contexts'
 import css from './picture.module.css'
 
 /** Which allowance the picture, the rows and the trail's chart show; nothing where there is only one. */
 export function AllowanceSwitch() {
   const { budget, evaluation } = useReading()
-  const { allowance, showAllowance } = useView()
+  const { allowance } = useView()
+  const { showAllowance } = useLook()
   if (evaluation.allowances.length < 2) return null
   return (
     <fieldset className={css.switch}>

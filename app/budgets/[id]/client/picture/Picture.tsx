@@ -2,7 +2,7 @@
 import type { Present } from '../../../../../lib/sheet/wire'
 import { LevelDiagram } from '../../../../diagram/LevelDiagram'
 import type { Was } from '../../../../diagram/was'
-import { useReading, useView } from '../state/contexts'
+import { useLook, useReading, useView } from '../state/contexts'
 import { AllowanceSwitch } from './AllowanceSwitch'
 import css from './picture.module.css'
 import { useWidth } from './useWidth'
@@ -17,7 +17,8 @@ type Props = { readonly allowance: string; readonly people: readonly Present[]; 
 
 function PictureOf({ allowance, people, was }: Props) {
   const { budget, evaluation } = useReading()
-  const { selected, select } = useView()
+  const { selected } = useView()
+  const { select } = useLook()
   const { ref, width } = useWidth<HTMLDivElement>()
   return (
     <section aria-label="Level diagram" className={css.picture}>

@@ -1,6 +1,6 @@
 'use client'
 import type { KeyboardEvent, ReactNode } from 'react'
-import { useView } from '../state/contexts'
+import { useLook } from '../state/contexts'
 import { Cell } from './parts'
 import css from './rows.module.css'
 import { useCurrent } from './useCurrent'
@@ -16,7 +16,7 @@ type Props = {
 
 /** A cell that shows what the detail holds; Enter or a click leads there. */
 export function GoCell({ id, field, label, className = '', children }: Props) {
-  const { goTo } = useView()
+  const { goTo } = useLook()
   const key = `lines/${id}/${field}@row`
   const go = () => goTo({ section: 'lines', id, field })
   return (

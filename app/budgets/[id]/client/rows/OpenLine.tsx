@@ -2,7 +2,7 @@
 import { type FormEvent, useId, useState } from 'react'
 import { addRow } from '../deeds/channel'
 import { inOrder } from '../deeds/records'
-import { useBench, useReading, useView } from '../state/contexts'
+import { useBench, useLook, useReading, useView } from '../state/contexts'
 import { type OpenLineContext, readOpenLine } from '../typed/openLine'
 import { recordName } from '../words/say'
 import css from './openLine.module.css'
@@ -12,7 +12,8 @@ import { statedAt } from './statedAt'
 export function OpenLine() {
   const { budget, evaluation } = useReading()
   const { canWrite, edit, read } = useBench()
-  const { selected, select, allowance } = useView()
+  const { selected, allowance } = useView()
+  const { select } = useLook()
   const [typed, setTyped] = useState('')
   const [refused, setRefused] = useState<string | null>(null)
   const id = useId()

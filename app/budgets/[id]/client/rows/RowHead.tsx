@@ -1,8 +1,9 @@
 'use client'
-import { type KeyboardEvent, type ReactNode, useContext } from 'react'
+import type { KeyboardEvent, ReactNode } from 'react'
 import { Standing, standingColour } from '../slips/Aside'
 import slips from '../slips/slips.module.css'
-import { OthersContext, type Selected, useBench, useView } from '../state/contexts'
+import { type Selected, useBench, useLook } from '../state/contexts'
+import { usePlace } from '../state/usePlace'
 import { RowHeader } from './parts'
 import css from './rows.module.css'
 import { useCurrent } from './useCurrent'
@@ -15,10 +16,10 @@ type Props = Selected & {
 
 /** The head of a row: selects it, opens its detail, and removes it on Delete. */
 export function RowHead({ section, id, label, children, onRemove }: Props) {
-  const { canWrite } = useBench()
-  const { openDetail, select } = useView()
+  const { canWrite, standing } = useBench()
+  const { openDetail, select } = useLook()
   const key = rowKey({ section, id })
-  const others = useContext(OthersContext).get(key) ?? []
+  const others = usePlace(standing, key) ?? []
   const onKeyDown = (event: KeyboardEvent) => {
     if (event.key === 'Delete' && canWrite) onRemove()
     else if (event.key === 'Enter' || event.key === ' ') openDetail(true)

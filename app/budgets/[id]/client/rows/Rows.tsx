@@ -3,7 +3,7 @@ import { type KeyboardEvent, useId, useMemo, useRef } from 'react'
 import { AssemblyTextures, textureFill } from '../../../../marks/AssemblyTexture'
 import { TEXTURES, texturesOf } from '../../../../marks/texture'
 import { addRow, moveRow, type NewRow, shownRows } from '../deeds/channel'
-import { useBench, useReading, useView } from '../state/contexts'
+import { useBench, useLook, useReading, useView } from '../state/contexts'
 import { LineRow } from './LineRow'
 import { PlaneRow } from './PlaneRow'
 import { Grid } from './parts'
@@ -18,6 +18,7 @@ export function Rows() {
   const { budget, evaluation } = useReading()
   const bench = useBench()
   const view = useView()
+  const { goTo } = useLook()
   const root = useRef<HTMLDivElement>(null)
   const keys = useGridKeys(root)
   const textureId = useId()
@@ -40,7 +41,7 @@ export function Rows() {
     } else if (event.key === 'Insert') {
       const blank: NewRow = { section: 'lines', values: { assembly: budget.lines[id]?.assembly ?? null } }
       const added = addRow(bench.read(), id, blank)
-      if (bench.act(added.operations)) view.goTo({ section: 'lines', id: added.id, field: 'name' })
+      if (bench.act(added.operations)) goTo({ section: 'lines', id: added.id, field: 'name' })
     } else return
     event.preventDefault()
   }

@@ -12,7 +12,7 @@ export type SlipSpec = {
   /** Name of the slip, for its draft and for the focus. */
   readonly key: string
   /** The fields that it writes: others may stand on them, and they may be not yet saved. The first names the slip. */
-  readonly places: readonly [Place, ...Place[]]
+  readonly places: readonly [Place] | readonly [Place, Place]
   readonly label: string
   readonly kind: 'line' | 'note' | 'choice'
   /** What stands in it now, as typed. Of a choice: the code. */

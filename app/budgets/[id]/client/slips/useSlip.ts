@@ -1,9 +1,10 @@
 'use client'
-import { useCallback, useContext, useSyncExternalStore } from 'react'
+import { useCallback, useSyncExternalStore } from 'react'
 import { placeKey } from '../../../../../lib/sheet/place'
 import type { Present } from '../../../../../lib/sheet/wire'
-import { OthersContext, UnsavedContext, useBench } from '../state/contexts'
+import { useBench } from '../state/contexts'
 import type { Draft } from '../state/drafts'
+import { usePlace } from '../state/usePlace'
 import type { SlipSpec } from './spec'
 
 export type Slip = {
@@ -37,18 +38,19 @@ export function useSlip(spec: SlipSpec, key: string = spec.key): Slip {
     () => drafts.get(key),
     () => null,
   )
-  const unsavedPlaces = useContext(UnsavedContext)
-  const standing = useContext(OthersContext)
-  const places = spec.places.map(placeKey)
-  const others = places.flatMap((place) => standing.get(place) ?? NOBODY)
+  const place = placeKey(spec.places[0])
+  const other = placeKey(spec.places[1] ?? spec.places[0])
+  const unsaved = [usePlace(bench.unsaved, place), usePlace(bench.unsaved, other)]
+  const here = usePlace(bench.standing, place) ?? NOBODY
+  const there = usePlace(bench.standing, other) ?? NOBODY
 
   const restore = () => drafts.set(key, null)
   return {
     draft,
     text: draft?.text ?? spec.text,
     meanwhile: draft && draft.base !== spec.text && draft.text !== spec.text ? spec.text : null,
-    unsaved: places.some((place) => unsavedPlaces.has(place)),
-    others,
+    unsaved: unsaved.includes(true),
+    others: other === place ? here : [...here, ...there],
     canWrite: bench.canWrite,
     type: (text) => drafts.set(key, { text, base: draft?.base ?? spec.text, reason: null }),
     restore,

@@ -5,6 +5,8 @@ import type { Budget } from '../../../../../lib/budget/schema'
 import type { Operation } from '../../../../../lib/sheet/change'
 import type { Present } from '../../../../../lib/sheet/wire'
 import type { Drafts } from './drafts'
+import type { Goal } from './focusPlace'
+import type { PlaceMap } from './placeMap'
 import type { Roving } from './roving'
 import type { SheetDeeds } from './sheet'
 
@@ -16,6 +18,10 @@ export type Bench = {
   readonly canWrite: boolean
   readonly drafts: Drafts
   readonly roving: Roving
+  /** People other than oneself, by the place that they are at. */
+  readonly standing: PlaceMap<readonly Present[]>
+  /** Places whose value the server has not acknowledged yet. */
+  readonly unsaved: PlaceMap<true>
   readonly read: SheetDeeds['read']
   /** For slips, which show the answer themselves. */
   readonly edit: SheetDeeds['edit']
@@ -28,30 +34,34 @@ export type Bench = {
 /** A line or a plane of the channel. */
 export type Selected = { readonly section: 'lines' | 'planes'; readonly id: string }
 
+/** What one looks at. */
 export type View = {
   readonly budgetId: string
   readonly selected: Selected | null
-  readonly select: (row: Selected | null) => void
   /** Where there is no room beside the rows, the detail is a sheet that is opened by hand. */
   readonly detailOpen: boolean
-  readonly openDetail: (open: boolean) => void
   /** The allowance in view. */
   readonly allowance: string | null
+}
+
+/** How to look at something else; these keep their identity, so that what only leads somewhere is not drawn again. */
+export type Look = {
+  readonly select: (row: Selected | null) => void
+  readonly openDetail: (open: boolean) => void
   readonly showAllowance: (id: string) => void
   /** Puts the focus on a place, wherever on the page it can be typed. */
-  readonly goTo: (place: { section: string; id: string | null; field: string | null }) => void
+  readonly goTo: (place: Goal) => void
 }
 
 export const ReadingContext = createContext<Reading | null>(null)
 export const BenchContext = createContext<Bench | null>(null)
 export const ViewContext = createContext<View | null>(null)
-export const UnsavedContext = createContext<ReadonlySet<string>>(new Set())
-/** People other than oneself, by the place that they are at. */
-export const OthersContext = createContext<ReadonlyMap<string, readonly Present[]>>(new Map())
+export const LookContext = createContext<Look | null>(null)
 
 export const useReading = () => given(useContext(ReadingContext), 'ReadingContext')
 export const useBench = () => given(useContext(BenchContext), 'BenchContext')
 export const useView = () => given(useContext(ViewContext), 'ViewContext')
+export const useLook = () => given(useContext(LookContext), 'LookContext')
 
 function given<T>(value: T | null, name: string): T {
   if (value === null) throw new Error(`${name} is used outside the worksheet.`)

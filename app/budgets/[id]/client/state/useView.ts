@@ -1,7 +1,7 @@
 'use client'
 import { type RefObject, useCallback, useLayoutEffect, useMemo, useRef, useState } from 'react'
 import type { Evaluation } from '../../../../../lib/budget/evaluation'
-import type { Selected, View } from './contexts'
+import type { Look, Selected, View } from './contexts'
 import { focusPlace, type Goal } from './focusPlace'
 
 /** A goal that has not come onto the page by then is given up: the focus must not jump later. */
@@ -29,9 +29,9 @@ export function useViewState(
   evaluation: Evaluation,
   root: RefObject<HTMLElement | null>,
   { selected, select, chosen, showAllowance, focus }: Kept,
-): View {
+): { readonly view: View; readonly look: Look } {
   const [detailOpen, openDetail] = useState(false)
-  const [, look] = useState(0)
+  const [, drawAgain] = useState(0)
   const goal = useRef<{ place: Goal; since: number } | null>(null)
 
   const goTo = useCallback(
@@ -40,7 +40,7 @@ export function useViewState(
       if (row) select(row)
       if (row && place.field !== null && !inRows(root.current, place)) openDetail(true)
       goal.current = { place, since: Date.now() }
-      look((turn) => turn + 1)
+      drawAgain((turn) => turn + 1)
     },
     [root, select],
   )
@@ -59,10 +59,12 @@ export function useViewState(
 
   const known = evaluation.allowances.some(({ id }) => id === chosen)
   const allowance = known ? chosen : (evaluation.allowances[0]?.id ?? null)
-  return useMemo(
-    () => ({ budgetId, selected, select, detailOpen, openDetail, allowance, showAllowance, goTo }),
-    [budgetId, selected, select, detailOpen, allowance, showAllowance, goTo],
+  const view = useMemo(
+    () => ({ budgetId, selected, detailOpen, allowance }),
+    [budgetId, selected, detailOpen, allowance],
   )
+  const look = useMemo(() => ({ select, openDetail, showAllowance, goTo }), [select, showAllowance, goTo])
+  return { view, look }
 }
 
 function rowOf({ section, id }: Goal): Selected | null {

@@ -1,7 +1,7 @@
 'use client'
 import type { Scalar } from '../../../../../lib/budget/schema'
 import { addRecord, removedOnes, setField } from '../deeds/records'
-import { useBench, useReading, useView } from '../state/contexts'
+import { useBench, useLook, useReading } from '../state/contexts'
 import { RECORD_WORDS } from '../words/labels'
 import { recordName } from '../words/say'
 import type { TableSection } from './section'
@@ -9,7 +9,7 @@ import css from './tables.module.css'
 
 export function AddRecord({ section, fresh }: { section: TableSection; fresh: Readonly<Record<string, Scalar>> }) {
   const { canWrite, act, read } = useBench()
-  const { goTo } = useView()
+  const { goTo } = useLook()
   if (!canWrite) return null
   const add = () => {
     const added = addRecord(read(), section, fresh)

@@ -1,6 +1,6 @@
 'use client'
 import type { TrailEntry } from '../../../../../lib/sheet/wire'
-import { useReading, useView } from '../state/contexts'
+import { useLook, useReading } from '../state/contexts'
 import { When } from '../words/When'
 import css from './trail.module.css'
 import { deedsOf, effectWords } from './trailWords'
@@ -16,7 +16,7 @@ const DOOR: Readonly<Record<TrailEntry['door'], string>> = {
 /** One entry: what it did to each margin, what was changed, who and when. */
 export function EntryItem({ entry }: { entry: TrailEntry }) {
   const { budget } = useReading()
-  const { goTo } = useView()
+  const { goTo } = useLook()
   const deeds = deedsOf(entry, budget)
   const effects = entry.effects.flatMap((effect) => effectWords(effect) ?? [])
   return (
