@@ -80,10 +80,10 @@ describe('who may open a worksheet', () => {
     const page = await Page.dial(`${world.url}${budget}`, { headers: cookie('ann'), origin: PUBLIC_URL })
     page.askForDocument()
     page.send(encodeMessage({ type: MESSAGE.cell, header: null }))
-    await arrived(page)
+    await page.heard()
     timers.advance(9_000)
     page.askForDocument()
-    await arrived(page)
+    await page.heard()
     expect(page.received).toEqual([])
     timers.advance(1_000)
     expect((await page.closed).code).toBe(4408)
@@ -306,12 +306,4 @@ async function asked(page: Page): Promise<void> {
   const before = documents()
   page.askForDocument()
   await page.until(() => documents() > before)
-}
-
-/** Resolves when the server has received what the page has sent, without an answer to tell by. */
-async function arrived(page: Page): Promise<void> {
-  await new Promise((resolve) => {
-    page.socket.once('pong', resolve)
-    page.socket.ping()
-  })
 }

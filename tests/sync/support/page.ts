@@ -1,7 +1,7 @@
 import { randomInt } from 'node:crypto'
 import * as decoding from 'lib0/decoding'
 import * as encoding from 'lib0/encoding'
-import { onTestFinished } from 'vitest'
+import { afterEach } from 'vitest'
 import { WebSocket } from 'ws'
 import * as Y from 'yjs'
 import {
@@ -30,6 +30,12 @@ export type Received =
 export type Closed = { code: number; reason: string }
 type Answer = Acknowledged | Refused
 
+/** Sockets that a test has left open; what is closed is not kept, so that the heap can be watched. */
+const open = new Set<WebSocket>()
+afterEach(() => {
+  for (const socket of open) socket.terminate()
+})
+
 /** One end of a socket, with frames made by hand: no client code of ours. */
 export class Page {
   readonly received: Received[] = []
@@ -55,7 +61,8 @@ export class Page {
         resolve(this.ending)
       })
     })
-    onTestFinished(() => socket.terminate())
+    open.add(socket)
+    socket.once('close', () => open.delete(socket))
   }
 
   /** Opens a socket and says nothing. */
@@ -119,6 +126,13 @@ export class Page {
     const isIt = (one: Received) =>
       (one.type === 'acknowledged' || one.type === 'refused') && one.header.editId === editId
     return this.until(isIt).then((one) => (one as { header: Answer }).header)
+  }
+
+  /** Resolves when the server has received what was sent, or has closed the socket. */
+  async heard(): Promise<void> {
+    const ponged = new Promise((resolve) => this.socket.once('pong', resolve))
+    if (this.socket.readyState === this.socket.OPEN) this.socket.ping()
+    await Promise.race([ponged, this.closed])
   }
 
   /** Everything of a kind that has come so far. */
