@@ -58,6 +58,7 @@ export const FLAGS = {
   'curve-not-judged': ['notice', 'The limit curve is not judged.'],
   'floor-not-judged': ['notice', 'The return loss is not judged.'],
   'lane-beyond-count': ['notice', 'A value is given for a lane that the link does not have.'],
+  'lane-value-not-used': ['notice', "A lane's value is not read by the model of its line."],
   'count-not-used': ['notice', 'How many alike is not used by this model.'],
   'skew-adds': ['notice', 'Skew of several lines may add up to more than its parts.'],
 } as const satisfies Record<string, readonly [Severity, string]>

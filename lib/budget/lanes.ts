@@ -1,6 +1,7 @@
 import type { FlagDraft } from './flags'
 import { itemInLane, type LaneFields, type LineItem } from './lineItem'
-import { nameOf } from './record'
+import { laneFieldsNotRead } from './models'
+import { fieldWords, nameOf } from './record'
 import type { Budget } from './schema'
 
 /** The lanes of a link and what they say instead of their lines. */
@@ -36,6 +37,8 @@ export function lanesOf(budget: Budget, items: readonly LineItem[]): Lanes {
     }
     const beyond = [...ofLine.keys()].filter((lane) => lane > count).sort((a, b) => a - b)
     if (beyond.length > 0) drafts.push(beyondCount(item, beyond, count))
+    const unread = laneFieldsNotRead(item.line).filter((field) => [...ofLine.values()].some((own) => field in own))
+    if (unread.length > 0) drafts.push(notRead(item, unread))
     if (lanes.size > 0) differing.set(item.id, lanes)
   }
   return { count, differing, drafts }
@@ -56,6 +59,18 @@ export function distinctLanes(lanes: Lanes, lines: readonly LineItem[]): number[
 
 export function inLane(lanes: Lanes, item: LineItem, lane: number): LineItem {
   return lanes.differing.get(item.id)?.get(lane) ?? item
+}
+
+function notRead(item: LineItem, fields: readonly string[]): FlagDraft {
+  const what = fields.map((field) => fieldWords('lines', field)).join(' and ')
+  return {
+    code: 'lane-value-not-used',
+    section: 'lines',
+    id: item.id,
+    field: fields[0] ?? null,
+    message: `${nameOf('lines', item.id, item.line)}: lanes have their own ${what}, which the model '${item.line.model}' does not read.`,
+    todo: 'Choose a model that reads it, or clear these values.',
+  }
 }
 
 function beyondCount(item: LineItem, beyond: readonly number[], count: number): FlagDraft {

@@ -167,6 +167,12 @@ const RAISED: Readonly<Record<FlagCode, readonly [Partial<BudgetFile>, string, s
     'a',
     null,
   ],
+  'lane-value-not-used': [
+    { head: { ...head, laneCount: 2 }, ...a({}), laneValues: { 'a/2/stub': '0.3 mm' } },
+    'lines',
+    'a',
+    'stub',
+  ],
   'count-not-used': [a({ count: 2 }), 'lines', 'a', 'count'],
   'skew-adds': [
     { lines: { a: line('a1', '1 dB', { ...trace, skew: '8 ps' }), b: line('a2', '1 dB', { ...trace, skew: '8 ps' }) } },

@@ -1,4 +1,4 @@
-import type { Line, ModelType } from '../schema'
+import { LANE_FIELDS, type Line, type ModelType } from '../schema'
 import { lossClass } from './lossClass'
 import type { Model } from './model'
 import { pad } from './pad'
@@ -29,6 +29,21 @@ const MODELS: Readonly<Record<ModelType, Model>> = {
   'ac-capacitor': notComputed,
   cable: notComputed,
   network: notComputed,
+}
+
+/** The fields that may differ from lane to lane and that a model reads; skew is read with every model. */
+const LANE_FIELDS_READ: Readonly<Record<string, readonly (typeof LANE_FIELDS)[number][]>> = {
+  stated: ['loss', 'skew'],
+  class: ['length', 'lossClass', 'skew'],
+  'per-length': ['length', 'skew'],
+  table: ['skew'],
+  pad: ['skew'],
+}
+
+/** Lane fields that the line's model does not read; none for a model that is missing or not computed. */
+export function laneFieldsNotRead(line: Line): readonly string[] {
+  const read = line.model === null ? undefined : LANE_FIELDS_READ[line.model]
+  return read ? LANE_FIELDS.filter((field) => !read.includes(field)) : []
 }
 
 const modelMissing: Model = ({ fields }) =>
