@@ -1,4 +1,5 @@
 'use client'
+import { memo } from 'react'
 import {
   CartesianGrid,
   Line,
@@ -21,7 +22,7 @@ type Props = {
 }
 
 /** Steps of the margin over the trail; the ground lies below 0. */
-export default function MarginChart({ steps, requiredDb, read, onRead }: Props) {
+export default memo(function MarginChart({ steps, requiredDb, read, onRead }: Props) {
   const data = steps.map((step, at) => ({ at, marginDb: step.marginDb }))
   const known = steps.flatMap(({ marginDb }) => marginDb ?? [])
   const low = Math.min(0, ...known)
@@ -64,4 +65,4 @@ export default function MarginChart({ steps, requiredDb, read, onRead }: Props) 
       </LineChart>
     </ResponsiveContainer>
   )
-}
+})

@@ -1,5 +1,5 @@
 'use client'
-import { lazy, Suspense, useId, useState } from 'react'
+import { lazy, Suspense, useId, useMemo, useState } from 'react'
 import type { TrailEntry } from '../../../../../lib/sheet/wire'
 import { decibels, plainDecibels } from '../../../../words/decibels'
 import { useReading, useView } from '../state/contexts'
@@ -17,7 +17,7 @@ export function MarginTrend({ entries }: { entries: readonly TrailEntry[] }) {
   const id = useId()
   const [read, setRead] = useState<number | null>(null)
   const allowance = evaluation.allowances.find((each) => each.id === inView)
-  const steps = allowance ? marginSteps(entries, allowance.id) : []
+  const steps = useMemo(() => (inView === null ? [] : marginSteps(entries, inView)), [entries, inView])
   if (!allowance || steps.length < 2) return null
   const at = Math.min(read ?? steps.length - 1, steps.length - 1)
   const step = steps[at]

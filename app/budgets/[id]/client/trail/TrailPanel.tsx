@@ -1,5 +1,5 @@
 'use client'
-import { useId, useState } from 'react'
+import { useId, useMemo, useState } from 'react'
 import type { TrailEntry } from '../../../../../lib/sheet/wire'
 import { useReading, useView } from '../state/contexts'
 import { recordName } from '../words/say'
@@ -16,7 +16,7 @@ export function TrailPanel({ recent }: { recent: readonly TrailEntry[] }) {
   const trail = useTrail(recent)
   const [ofRow, setOfRow] = useState(false)
   const id = useId()
-  const written = trail.entries.filter((entry) => entry.kind !== 'bind')
+  const written = useMemo(() => trail.entries.filter((entry) => entry.kind !== 'bind'), [trail.entries])
   const shown = ofRow && selected ? written.filter((entry) => touches(entry, selected.section, selected.id)) : written
   return (
     <section className={css.panel} aria-labelledby={id}>

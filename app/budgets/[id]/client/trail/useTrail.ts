@@ -1,5 +1,5 @@
 'use client'
-import { useState } from 'react'
+import { useMemo, useState } from 'react'
 import type { TrailEntry } from '../../../../../lib/sheet/wire'
 import { useView } from '../state/contexts'
 
@@ -21,7 +21,7 @@ export function useTrail(recent: readonly TrailEntry[]): Trail {
   const [older, setOlder] = useState<readonly TrailEntry[]>([])
   const [asking, setAsking] = useState(false)
   const [problem, setProblem] = useState<string | null>(null)
-  const entries = joined(recent, older)
+  const entries = useMemo(() => joined(recent, older), [recent, older])
   const oldest = entries.at(-1)?.seq ?? null
 
   const more = async () => {
