@@ -21,7 +21,7 @@ function randomFrom(state: number): () => number {
   }
 }
 
-test(`[W5.kill] ${KILLS} kills, two thirds during an append, lose nothing that was acknowledged (seed ${seed})`, async () => {
+test(`[W5.9] ${KILLS} kills, two thirds during an append, lose nothing that was acknowledged (seed ${seed})`, async () => {
   const random = randomFrom(seed)
   const acknowledged = new Map<string, number>()
   let during = 0

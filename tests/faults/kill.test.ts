@@ -7,7 +7,7 @@ beforeAll(async () => {
 })
 afterAll(() => prepared?.remove())
 
-test('[W5.kill] five kills of the server while edits are in flight lose nothing that was acknowledged', async () => {
+test('[W5.9] five kills of the server while edits are in flight lose nothing that was acknowledged', async () => {
   const acknowledged = new Map<string, number>()
   let during = 0
   for (let kill = 0; kill < 5; kill += 1) {
