@@ -35,7 +35,7 @@ function Headline({ allowance }: { allowance: AllowanceEvaluation }) {
       </p>
       <p className={css.strong}>{judgedWords(allowance, budget)}</p>
       <p className={css.quiet}>{[allowance.name, sentence, span(allowance, budget)].filter(Boolean).join(' · ')}</p>
-      <p className={css.strong}>{allowance.words}</p>
+      {allowance.words !== verdict && <p className={css.strong}>{allowance.words}</p>}
       {reasons.length > 0 && (
         <ul className={css.reasons}>
           {reasons.map((reason) => (
