@@ -6,6 +6,7 @@
 import { spawn } from 'node:child_process'
 import { existsSync } from 'node:fs'
 import { join } from 'node:path'
+import { readConfig } from './boot/config.mjs'
 import { requireNode, requireToolchain } from './boot/machine.mjs'
 import { ROOT } from './boot/paths.mjs'
 import { buildPages, bundleServer, generateClient, installPackages } from './boot/steps.mjs'
@@ -23,10 +24,12 @@ const vitest = (tier) => async () => {
 
 const COMMANDS = {
   start: {
+    before: () => readConfig('demo', process.env, ROOT),
     steps: ['install', 'generate', 'build', 'bundle'],
     go: () => run(['dist/server.mjs', 'demo', ...rest], PRODUCTION),
   },
   serve: {
+    before: () => readConfig('serve', process.env, ROOT),
     steps: ['install', 'generate', 'build', 'bundle'],
     go: () => run(['dist/server.mjs', 'serve', ...rest], PRODUCTION),
   },
@@ -63,6 +66,7 @@ if (!chosen) {
 }
 try {
   requireNode()
+  chosen.before?.()
   for (const step of chosen.steps) await STEPS[step]({ requireToolchain })
   process.exitCode = await chosen.go()
 } catch (error) {

@@ -1,6 +1,6 @@
 import { existsSync } from 'node:fs'
 import { join, resolve } from 'node:path'
-import { ConfigError, readConfig } from './config'
+import { ConfigError, readConfig } from './boot/config.mjs'
 import { seedDemo } from './demo'
 import { startServer } from './start'
 

@@ -1,5 +1,5 @@
 import type { RequestListener } from 'node:http'
-import type { Config } from './config'
+import type { Config } from './boot/config.mjs'
 
 /** Starts Next inside this process. Imported only where pages are wanted: it takes a second and 100 MB. */
 export async function openPages(

@@ -1,6 +1,6 @@
 import { writeSync } from 'node:fs'
 import { openStore } from '../../lib/records/open'
-import { readConfig } from '../../lib/server/config'
+import { readConfig } from '../../lib/server/boot/config.mjs'
 import { startServer } from '../../lib/server/start'
 
 /**

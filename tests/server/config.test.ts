@@ -1,6 +1,6 @@
 import { join } from 'node:path'
 import { expect, test } from 'vitest'
-import { readConfig } from '../../lib/server/config'
+import { readConfig } from '../../lib/server/boot/config.mjs'
 
 const root = join('/', 'somewhere')
 

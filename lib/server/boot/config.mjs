@@ -1,27 +1,28 @@
 import { join, resolve } from 'node:path'
 
-/** How this process runs, read once from the environment. */
-export type Config = {
-  readonly mode: 'demo' | 'serve' | 'dev'
-  /** Databases, evidence and keys; nothing is ever written elsewhere. */
-  readonly directory: string
-  readonly host: string
-  readonly port: number
-  /** What people type to get here; the Origin that every change must come from. */
-  readonly publicUrl: string
-  /** False: no pages, only the socket (fault tests start the server so). */
-  readonly pages: boolean
-}
+/**
+ * How this process runs, read once from the environment: before anything is built, so that a wrong setting is told at once.
+ * @typedef {object} Config
+ * @property {'demo' | 'serve' | 'dev'} mode
+ * @property {string} directory databases, evidence and keys; nothing is ever written elsewhere
+ * @property {string} host
+ * @property {number} port
+ * @property {string} publicUrl what people type to get here; the Origin that every change must come from
+ * @property {boolean} pages false: no pages, only the socket (fault tests start the server so)
+ */
 
 export class ConfigError extends Error {}
 
 const LOOPBACK = ['127.0.0.1', '::1', 'localhost']
 
 /**
- * @param root folder of the project, for the demo's own data directory
- * @throws ConfigError with a sentence that says what to set
+ * @param {string | undefined} mode
+ * @param {Readonly<Record<string, string | undefined>>} environment
+ * @param {string} root folder of the project, for the demo's own data directory
+ * @returns {Readonly<Config>}
+ * @throws {ConfigError} with a sentence that says what to set
  */
-export function readConfig(mode: string | undefined, environment: Readonly<Record<string, string | undefined>>, root: string): Config {
+export function readConfig(mode, environment, root) {
   if (mode !== 'demo' && mode !== 'serve' && mode !== 'dev')
     throw new ConfigError("Start with 'demo', 'serve' or 'dev'.")
   const host = environment.HALFBAUD_HOST ?? '127.0.0.1'
@@ -41,29 +42,40 @@ export function readConfig(mode: string | undefined, environment: Readonly<Recor
   }
 }
 
-function readPort(text: string): number {
+/** @param {string} text */
+function readPort(text) {
   const port = Number(text)
-  if (!Number.isInteger(port) || port < 0 || port > 65535)
+  if (!Number.isInteger(port) || port < 0 || port > 65535) {
     throw new ConfigError(`HALFBAUD_PORT is '${text}'; set a number from 0 to 65535.`)
+  }
   return port
 }
 
-function readDirectory(mode: Config['mode'], given: string | undefined, root: string): string {
+/**
+ * @param {Config['mode']} mode
+ * @param {string | undefined} given
+ * @param {string} root
+ */
+function readDirectory(mode, given, root) {
   if (given) return resolve(given)
-  if (mode === 'serve')
+  if (mode === 'serve') {
     throw new ConfigError('Set HALFBAUD_DATA to the folder that shall hold the databases, evidence and keys.')
+  }
   return join(root, '.data', mode)
 }
 
-function readPublicUrl(given: string | undefined, host: string, port: number): string {
+/**
+ * @param {string | undefined} given
+ * @param {string} host
+ * @param {number} port
+ */
+function readPublicUrl(given, host, port) {
   const text = given ?? `http://${host.includes(':') ? `[${host}]` : host}:${port}`
-  let url: URL
-  try {
-    url = new URL(text)
-  } catch {
+  const url = URL.canParse(text) ? new URL(text) : null
+  if (!url || !['http:', 'https:'].includes(url.protocol)) {
     throw new ConfigError(`HALFBAUD_PUBLIC_URL is '${text}'; set a whole address such as https://budgets.example.com.`)
   }
-  if (!['http:', 'https:'].includes(url.protocol) || url.pathname !== '/' || url.search || url.hash || url.username) {
+  if (url.pathname !== '/' || url.search || url.hash || url.username) {
     throw new ConfigError(
       `HALFBAUD_PUBLIC_URL is '${text}'; set scheme, host and port only, such as https://budgets.example.com.`,
     )
