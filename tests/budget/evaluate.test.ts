@@ -50,5 +50,8 @@ describe('verdicts (word list of the design; sums by hand)', () => {
   it('summarises each allowance for the trail', () => {
     const evaluation = evaluate(link({ lines: { a: line('a1', '4 dB') } }), EVIDENCE)
     expect(margins(evaluation)).toEqual({ limit: { verdict: 'inside', marginDb: 8, knownDb: 4 } })
+    const nowhere = { ...link({}).allowances.limit, order: 'a0', to: null }
+    const without = evaluate(link({ lines: { a: line('a1', '4 dB') }, allowances: { limit: nowhere } }), EVIDENCE)
+    expect(margins(without)).toEqual({ limit: { verdict: 'undecided', marginDb: null, knownDb: null } })
   })
 })

@@ -67,6 +67,8 @@ describe('a stated number', () => {
     const cable = { kind: 'cable', model: 'stated', loss: '4 dB', at: '9.5 GHz' } as const
     expect(one({ ...cable, covers: 'bulk' }).by).toBe('moved')
     expect(one({ ...cable, covers: 'terminations' }).db).toBeNull()
+    expect(one({ ...cable, covers: 'terminations', length: '0.2 m' }).by).toBe('moved')
+    expect(one({ ...cable, covers: null }).by).toBe('moved')
   })
 
   it('needs a loss and a frequency, and says which field lacks', () => {

@@ -18,6 +18,8 @@ describe('a loss moved in frequency', () => {
     expect(moved?.db).toBeCloseTo((4 * 1.1 + 4 * Math.sqrt(1.1)) / 2, 12)
     expect(moved?.spreadDb).toBe(0)
     expect(moveUniformLoss(4, 10e9, 9e9)?.spreadDb).toBe(0)
+    expect(moveUniformLoss(4, 10e9, 11.01e9)?.spreadDb).toBeGreaterThan(0.1)
+    expect(moveUniformLoss(4, 10e9, 8.99e9)?.spreadDb).toBeGreaterThan(0.09)
   })
 
   it('moves it from 0.67 to 1.5 with the spread, and no further (by hand)', () => {
