@@ -1,8 +1,6 @@
+import { LIMITS } from '../budget/schema'
 import type { EvidenceRecord, Records, Store } from '../records/types'
 import type { EvidenceService, StoredEvidence } from './services'
-
-/** Touchstone files of a few ports and many points are the largest that are attached. */
-export const MOST_EVIDENCE_BYTES = 64 * 1024 * 1024
 
 /** Attached files: stored once by their SHA-256, described per budget. */
 export function createEvidenceService(
@@ -12,7 +10,7 @@ export function createEvidenceService(
 ): EvidenceService {
   return {
     async store(budget, identity, { name, mediaType, bytes }) {
-      const { sha256, size } = await files.store(bytes, MOST_EVIDENCE_BYTES)
+      const { sha256, size } = await files.store(bytes, LIMITS.evidenceBytes)
       const record = { budget, sha256, name, mediaType, size, person: identity.person, time: now() }
       return shown(await records.evidence.describe(record))
     },

@@ -14,8 +14,6 @@ export const storedEvidence = component(
   }) satisfies z.ZodType<StoredEvidence>,
 )
 
-export const EVIDENCE_LIMIT = 100 * 1024 * 1024
-
 /** What may be attached; a Touchstone file has no registered type and goes as octet-stream. */
 export const EVIDENCE_TYPES = [
   'application/octet-stream',

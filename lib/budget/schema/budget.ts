@@ -13,6 +13,7 @@ export const LIMITS = {
   laneValues: 500 * 256,
   laneValueLength: 40,
   editBytes: 4 * 1024 * 1024,
+  evidenceBytes: 100 * 1024 * 1024,
 } as const
 
 /** The sections of a budget that hold records by id. A record is flat: field → scalar. */

@@ -1,6 +1,7 @@
 import { z } from 'zod'
+import { LIMITS } from '../../../../../../lib/budget/schema'
 import { declare } from '../../../../declaration'
-import { EVIDENCE_LIMIT, EVIDENCE_TYPES, storedEvidence } from '../../../../schemas/evidence'
+import { EVIDENCE_TYPES, storedEvidence } from '../../../../schemas/evidence'
 import { shortText } from '../../../../schemas/people'
 
 export const listEvidence = declare({
@@ -21,6 +22,6 @@ export const attachEvidence = declare({
   query: z.strictObject({
     name: shortText(200, 'File name.').refine((name) => !/[/\\]/.test(name), 'Leave the folder out.'),
   }),
-  body: { upload: EVIDENCE_TYPES, limit: EVIDENCE_LIMIT },
+  body: { upload: EVIDENCE_TYPES, limit: LIMITS.evidenceBytes },
   answer: { status: 201, description: 'Stored once by its SHA-256; Location names it.', json: storedEvidence },
 })
