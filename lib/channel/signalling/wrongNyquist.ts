@@ -1,8 +1,7 @@
+import { holdsAt } from '../lines'
 import { LEVELS } from './code'
 import { type Overhead, overheadOf, type RateInput, type Rates } from './rate'
 
-/** A number holds within 2 % of its frequency. */
-const SAME = 0.02
 /** How close a frequency must lie to a mistake's own to be called by its name. */
 const CLOSE = 0.005
 
@@ -23,12 +22,12 @@ type Mistake = { readonly hz: number; readonly what: string }
  * @returns words that continue 'this is …', or null where it is right (within 2 %) or nothing fits within 0.5 %
  */
 export function usualMistake(hz: number, input: RateInput, rates: Rates): string | null {
-  if (Math.abs(hz / rates.nyquist - 1) <= SAME) return null
+  if (holdsAt(rates.nyquist, hz)) return null
   let best: string | null = null
   let nearest = CLOSE
   for (const mistake of mistakes(input, rates)) {
     const off = Math.abs(hz / mistake.hz - 1)
-    if (Math.abs(mistake.hz / rates.nyquist - 1) <= SAME || off > nearest - (best === null ? 0 : 1e-9)) continue
+    if (holdsAt(rates.nyquist, mistake.hz) || off > nearest - (best === null ? 0 : 1e-9)) continue
     best = mistake.what
     nearest = off
   }
