@@ -55,6 +55,7 @@ export async function openSync(options: SyncOptions): Promise<Sync> {
       { journal, records, committer, now: clock.now, engine, log },
       records,
       new Reader(journal, rooms),
+      rooms,
     ),
     evidence: createEvidenceService(store.evidence, records, clock.now),
     submit: createSubmit(rooms),

@@ -160,6 +160,38 @@ describe('a disk that fails', () => {
     expect(world.logged.join()).toContain('no space left')
   })
 
+  it('[W5.23] after a failed commit nothing is written before the journal’s head has been read', async () => {
+    const world = await openWorld()
+    const budget = await world.createBudget()
+    await world.stop()
+    const did: string[] = []
+    const heads: (() => void)[] = []
+    const again = await world.start((journal) => ({
+      ...journal,
+      append: async (rows) => {
+        const edits = rows.filter(({ entry }) => entry.kind === 'edit')
+        if (edits.length > 0) did.push('append')
+        if (did.length === 1 && edits.length > 0) throw new Error('no space left on the device')
+        await journal.append(rows)
+      },
+      head: async (id) => {
+        did.push('head')
+        if (did.length === 2) await new Promise<void>((resolve) => heads.push(resolve))
+        return journal.head(id)
+      },
+    }))
+    const ann = await Page.open(again, budget, 'ann')
+    const ben = await Page.open(again, budget, 'ben')
+    expect(await ann.answer(ann.edit(setLoss('6 dB')))).toMatchObject({ code: 'not-stored' })
+    const waiting = ben.edit(setLoss('7 dB', 'cable'))
+    await expect.poll(() => heads.length).toBe(1)
+    await ben.heard()
+    expect(did).toEqual(['append', 'head'])
+    heads[0]?.()
+    expect(await ben.answer(waiting)).toHaveProperty('seq')
+    expect(did).toEqual(['append', 'head', 'append'])
+  })
+
   it('[W5.23] a journal that somebody else wrote to: the room is let go and loaded anew', async () => {
     const world = await openWorld()
     const budget = await world.createBudget()

@@ -169,6 +169,30 @@ describe('sent twice', () => {
     expect(entries.filter(({ editId }) => editId === 'twice')).toHaveLength(1)
   })
 
+  it('[W2.23] from two tabs at the same moment: both are answered with one seq', async () => {
+    const world = await openWorld()
+    const budget = await world.createBudget()
+    await world.stop()
+    const searches: (() => void)[] = []
+    const again = await world.start((journal) => ({
+      ...journal,
+      findEdit: async (...asked) => {
+        const found = await journal.findEdit(...asked)
+        await new Promise<void>((resolve) => searches.push(resolve))
+        return found
+      },
+    }))
+    const [one, two] = [await Page.open(again, budget, 'ann'), await Page.open(again, budget, 'ann')]
+    const update = editOf(one.doc, setLoss('6 dB'))
+    for (const page of [one, two]) page.sendEdit(update, 'both', { clientId: one.clientId })
+    // Both searches of the journal have found nothing before either edit goes on.
+    await expect.poll(() => searches.length).toBe(2)
+    for (const search of searches) search()
+    const answers = [await one.answer('both'), await two.answer('both')]
+    expect(answers[0]).toHaveProperty('seq')
+    expect(answers[1]).toEqual(answers[0])
+  })
+
   it('[W2.24] an edit id with other bytes is refused: while it waits, after its commit, after a restart', async () => {
     const disk = holdableDisk()
     const world = await openWorld({ disk })

@@ -230,6 +230,28 @@ describe('who may write', () => {
     expect((await again.closed).code).toBe(4401)
   })
 
+  it('[W3.26] signed out while the budget is loaded: not let in', async () => {
+    const world = await openWorld()
+    const budget = await world.createBudget()
+    await world.stop()
+    const loading: (() => void)[] = []
+    const again = await world.start((journal) => ({
+      ...journal,
+      rows: async (...asked) => {
+        // Only the first: the stop reads the rows again for its snapshot.
+        if (loading.length === 0) await new Promise<void>((resolve) => loading.push(resolve))
+        return journal.rows(...asked)
+      },
+    }))
+    const page = await Page.dial(`${again.url}${budget}`, { headers: cookie('ann'), origin: PUBLIC_URL })
+    page.hello('ann')
+    await expect.poll(() => loading.length).toBe(1)
+    again.sessions.end('session-ann')
+    loading[0]?.()
+    expect((await page.closed).code).toBe(4401)
+    expect(page.received).toEqual([])
+  })
+
   it('[W3.28] a role that is given or taken counts at once; without any the socket is closed', async () => {
     const world = await openWorld()
     const budget = await world.createBudget()

@@ -3,6 +3,7 @@ import { evaluate } from '../../budget/evaluate'
 import { budgetSchema, SCHEMA_VERSION } from '../../budget/schema'
 import type { BudgetRecord, Records } from '../../records/types'
 import type { Role } from '../../sheet/wire'
+import type { Rooms } from '../rooms'
 import type { BudgetService, BudgetSummary } from '../services'
 import { createBudget, type Making } from './create'
 import type { Reader } from './reader'
@@ -13,6 +14,7 @@ export function createBudgetService(
   making: Making,
   records: Pick<Records, 'budgets' | 'people'>,
   reader: Reader,
+  rooms: Pick<Rooms, 'peek'>,
 ): BudgetService {
   return {
     async list(identity: Identity) {
@@ -39,7 +41,11 @@ export function createBudgetService(
       return { evaluation: found.evaluation, seq: found.head.seq }
     },
 
-    trail: (budget, range) => readTrail(making.journal, records, budget, range),
+    async trail(budget, range) {
+      // Found a moment after the commit: who has seen an edit also sees what it did.
+      await rooms.peek(budget)?.effectsKept()
+      return readTrail(making.journal, records, budget, range)
+    },
   }
 }
 

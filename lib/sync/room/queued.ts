@@ -2,6 +2,7 @@ import type { Identity } from '../../access/identity'
 import type { Budget } from '../../budget/schema'
 import type { Change } from '../../sheet/change'
 import type { Acknowledged, Door, Refused } from '../../sheet/wire'
+import type { Refusal } from '../gate/refusal'
 import type { EditKey } from './editKey'
 
 export type Answer = Acknowledged | Refused
@@ -34,3 +35,13 @@ export type Queued = QueuedEdit | QueuedBind
 
 /** An edit that came to nothing, such as setting what is set already: it has an entry, so that it can be asked about. */
 export const NO_UPDATE = new Uint8Array([0, 0])
+
+export function refused({ key }: Pick<Incoming, 'key'>, refusal: Refusal): Refused {
+  return { editId: key.editId, ...refusal }
+}
+
+/** The connection that sent all of these, which needs no copy of them. */
+export function onlySender(edits: readonly QueuedEdit[]): string | null {
+  const [first] = edits
+  return first && edits.every(({ from }) => from === first.from) ? first.from : null
+}

@@ -11,15 +11,15 @@ import type { Committer } from '../committer'
 import { Admission } from './admission'
 import { Bindings } from './bindings'
 import { Chain } from './chain'
-import { Desk, submitClientId } from './desk'
 import type { EditKey } from './editKey'
 import { KnownEdits } from './knownEdits'
 import type { Loaded } from './load'
 import { Peers } from './peers'
-import { type Actor, type Answer, type Incoming, NO_UPDATE } from './queued'
+import type { Actor, Answer, Incoming } from './queued'
 import { Roster } from './roster'
+import { Submissions } from './submissions'
 import { type Committed, Trail } from './trail'
-import { refused, WritePath } from './writePath'
+import { WritePath } from './writePath'
 
 /** What is committed of a budget. `lastEdit`: the newest entry that is no binding. */
 export type BudgetState = { readonly budget: Budget; readonly head: Head; readonly lastEdit: Entry }
@@ -49,8 +49,7 @@ export class Room {
   private readonly chain: Chain
   private readonly path: WritePath
   private readonly trail: Trail
-  private readonly desk: Desk
-  private readonly bindings: Bindings
+  private readonly submissions: Submissions
   private readonly stopPresence: Cancel
   private receiving = 0
   private name: string | null
@@ -67,7 +66,7 @@ export class Room {
     const { journal, sessions, committer, clock, log, engine } = deps
     this.snapshotSeq = loaded.snapshotSeq
     this.peers = new Peers(clock)
-    this.bindings = new Bindings(bound)
+    const bindings = new Bindings(bound)
     this.chain = new Chain(budget, engine, loaded.head)
     this.roster = new Roster((person) => sessions.role(person, budget), {
       changed: (person, role) => this.roleChanged(person, role),
@@ -77,7 +76,7 @@ export class Room {
       {
         live: loaded.doc,
         chain: this.chain,
-        bindings: this.bindings,
+        bindings,
         known: new KnownEdits(journal, budget),
         roster: this.roster,
         admission: new Admission(this.roster, ({ identity }) => sessions.valid(identity), clock.now),
@@ -86,8 +85,8 @@ export class Room {
         events: {
           spread: (update, from) => this.peers.sendUpdate(update, from),
           told: (committed) => this.told(committed),
-          accepted: (update) => this.desk.follow(update),
-          undone: () => this.desk.drop(),
+          accepted: (update) => this.submissions.follow(update),
+          undone: () => this.submissions.drop(),
           abused: (person) => this.closePerson(person, CLOSE.refused),
           unwritten: () => void this.examine(),
           broken: (cause) => this.breakDown('The live document could not follow the journal', cause),
@@ -96,7 +95,7 @@ export class Room {
       loaded.lastEdit,
     )
     this.name = this.path.budget.head.name
-    this.desk = new Desk(() => this.path.intake.state())
+    this.submissions = new Submissions(budget, this.path, bindings)
     this.trail = new Trail(budget, this.path.budget, journal, (entries) => this.peers.sendTrail(entries), log)
     this.stopPresence = clock.every(PRESENCE_INTERVAL, () => this.tick())
   }
@@ -139,41 +138,25 @@ export class Room {
    * when it is committed or refused.
    */
   async receive(incoming: Incoming, answer: (answer: Answer) => void): Promise<void> {
-    await this.counted(async () => {
-      const ahead = await this.path.ahead(incoming)
-      if (ahead) void ahead.answer.then(answer)
-      else this.path.offer(incoming, answer)
-    })
+    await this.counted(() => this.path.receive(incoming, () => this.path.offer(incoming, answer), answer))
   }
 
   /** Makes an edit from operations and takes it in like any other. */
   submit(actor: Actor, key: EditKey, operations: readonly Operation[], expectedSeq: number | null): Promise<Answer> {
-    return this.counted(async () => {
-      const { epoch } = this.chain.head
-      const ahead = await this.path.ahead({ actor, epoch, key })
-      if (ahead) return ahead.answer
-      if (expectedSeq !== null && (this.path.lastEdit.seq > expectedSeq || this.path.intake.hasEdits))
-        return refused({ key }, { code: 'conflict', reason: 'The budget was changed meanwhile; read it again.' })
-      const { person } = actor.identity
-      const clientId = submitClientId(this.budget, person, (id) => this.bindings.ownerOf(id))
-      const update = this.desk.draft(operations, clientId)
-      if (!(update instanceof Uint8Array)) return refused({ key }, update)
-      const incoming = { actor, from: null, epoch, key, clientId, update }
-      const answer = await new Promise<Answer>((resolve) => {
-        if (update === NO_UPDATE) this.path.accept(incoming, this.path.intake.nothing(), resolve)
-        else this.path.offer(incoming, resolve)
-      })
-      // The draft stands on the desk although the gate did not take it.
-      if ('code' in answer) this.desk.drop()
-      return answer
-    })
+    const asked = { actor, key, epoch: this.chain.head.epoch }
+    return this.counted(() => this.submissions.submit(asked, operations, expectedSeq))
+  }
+
+  /** Resolves when the effects of what is committed now are kept. */
+  effectsKept(): Promise<void> {
+    return this.trail.kept()
   }
 
   /** Resolves when all that came in is committed and answered, and its effects are kept. */
   async quiet(): Promise<void> {
     do {
       await this.deps.committer.idle()
-      await this.trail.idle()
+      await this.trail.kept()
       await new Promise((resolve) => setImmediate(resolve))
     } while (this.isWorking)
   }
@@ -189,7 +172,7 @@ export class Room {
     this.stopPresence()
     for (const peer of this.peers.all()) peer.close(reason)
     this.path.close()
-    this.desk.drop()
+    this.submissions.drop()
     this.loaded.doc.destroy()
   }
 

@@ -16,6 +16,9 @@ export class Trail {
   private running: Promise<void> | null = null
   private before: Budget
   private margins: Margins | null = null
+  private added = 0
+  private done = 0
+  private waiters: { until: number; resolve: () => void }[] = []
 
   constructor(
     private readonly budget: string,
@@ -30,12 +33,15 @@ export class Trail {
   add(committed: readonly Committed[]): void {
     if (committed.length === 0) return
     this.waiting.push(...committed)
+    this.added += committed.length
     this.running ??= this.run()
   }
 
-  /** Resolves when everything told so far has been kept and sent. */
-  async idle(): Promise<void> {
-    while (this.running) await this.running
+  /** Resolves when everything that was added until now has been kept and sent. */
+  kept(): Promise<void> {
+    const until = this.added
+    if (this.done >= until) return Promise.resolve()
+    return new Promise((resolve) => this.waiters.push({ until, resolve }))
   }
   get isIdle(): boolean {
     return this.running === null
@@ -57,6 +63,10 @@ export class Trail {
       }
       await this.keep(found.flatMap(({ entry, known }) => (known ? [{ seq: entry.seq, effects: entry.effects }] : [])))
       this.tell(found.map(({ entry }) => entry))
+      this.done += batch.length
+      const isDue = ({ until }: { until: number }) => until <= this.done
+      for (const { resolve } of this.waiters.filter(isDue)) resolve()
+      this.waiters = this.waiters.filter((waiter) => !isDue(waiter))
     }
     this.running = null
   }

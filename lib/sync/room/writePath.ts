@@ -10,7 +10,7 @@ import type { Bindings } from './bindings'
 import type { Chain } from './chain'
 import { Intake } from './intake'
 import type { KnownEdits } from './knownEdits'
-import type { Actor, Answer, Incoming, Queued, QueuedEdit } from './queued'
+import { type Actor, type Answer, type Incoming, onlySender, type Queued, refused } from './queued'
 import type { Roster } from './roster'
 import type { Committed } from './trail'
 
@@ -25,6 +25,9 @@ export type WritePathParts = {
   readonly now: () => number
   readonly events: WritePathEvents
 }
+
+/** An edit before its content is looked at. */
+export type Asked = Pick<Incoming, 'actor' | 'epoch' | 'key'>
 
 export type WritePathEvents = {
   /** The live document has changed; `from` is the connection that made all of it, if one did. */
@@ -83,18 +86,19 @@ export class WritePath implements Committing {
   }
 
   /**
-   * What can be said of an edit before its content is looked at: that it may not come in, or is known already.
-   * @returns null where it is new
+   * Takes an edit in: what is known already is answered, what is new enters. Resolves when it has entered or not, so that the
+   * sender's next edit may follow; its answer may come later.
    */
-  async ahead(incoming: Pick<Incoming, 'actor' | 'epoch' | 'key'>): Promise<{ answer: Promise<Answer> } | null> {
+  async receive(asked: Asked, enter: () => void, answer: (answer: Answer) => void): Promise<void> {
     const { known } = this.parts
-    const early = this.admit(incoming) ?? known.find(incoming.key)
-    if (early) return { answer: early }
-    const stored = await known.read(incoming.key).catch(() => refused(incoming, NOT_READ))
-    if (stored) return { answer: Promise.resolve(stored) }
-    // While the journal was read, the same edit may have come another way, or the person may have been stopped.
-    const late = known.find(incoming.key) ?? this.admit(incoming)
-    return late && { answer: late }
+    const searched = this.fromMemory(asked) ? null : known.read(asked.key).catch(() => refused(asked, NOT_READ))
+    const inJournal = await searched
+    // While the journal was read the same edit may have come another way, or its author may have been stopped. From here to
+    // the queue nothing waits.
+    const inMemory = this.fromMemory(asked)
+    if (inMemory) void inMemory.then(answer)
+    else if (inJournal) answer(inJournal)
+    else enter()
   }
 
   /** Through the gate into the queue, at once; the answer comes when it is committed or refused. */
@@ -200,14 +204,12 @@ export class WritePath implements Committing {
     }
   }
 
-  private admit(incoming: Pick<Incoming, 'actor' | 'epoch' | 'key'>): Promise<Answer> | null {
-    const { admission } = this.parts
+  /** What can be said of an edit from memory: that it may not come in, or is under way already. */
+  private fromMemory(asked: Asked): Promise<Answer> | null {
+    const { admission, known } = this.parts
     const refusal =
-      admission.stopped(incoming.actor) ??
-      admission.spent(incoming.actor) ??
-      this.full() ??
-      this.wrongEpoch(incoming.epoch)
-    return refusal && Promise.resolve(refused(incoming, refusal))
+      admission.stopped(asked.actor) ?? admission.spent(asked.actor) ?? this.full() ?? this.wrongEpoch(asked.epoch)
+    return refusal ? Promise.resolve(refused(asked, refusal)) : known.find(asked.key)
   }
 
   private full(): Refusal | null {
@@ -248,13 +250,3 @@ export class WritePath implements Committing {
 }
 
 const NOT_READ: Refusal = { code: 'not-stored', reason: 'The journal cannot be read just now; try again.' }
-
-export function refused({ key }: Pick<Incoming, 'key'>, refusal: Refusal): Answer {
-  return { editId: key.editId, ...refusal }
-}
-
-/** The connection that sent all of these, which needs no copy of them. */
-function onlySender(edits: readonly QueuedEdit[]): string | null {
-  const [first] = edits
-  return first && edits.every(({ from }) => from === first.from) ? first.from : null
-}

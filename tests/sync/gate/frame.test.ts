@@ -1,6 +1,7 @@
 import * as encoding from 'lib0/encoding'
 import { describe, expect, it } from 'vitest'
 import * as Y from 'yjs'
+import { judgeContent } from '../../../lib/sync/gate/contents'
 import { judgeFrame } from '../../../lib/sync/gate/frame'
 import { any, binary, deleted, type ForgedItem, forge, string, subdocument, type } from '../support/forge'
 import { copyOf, editOf, handMadeSheet, noteOf, putRecord, recordOf } from '../support/sheet'
@@ -323,6 +324,22 @@ describe('refused before the shadow is touched', () => {
         BEN,
       ),
     ).toBe('outside-layout')
+  })
+
+  it('[W4.4] half of a character pair, wherever it may come from', () => {
+    // The update format is UTF-8, which cannot carry one; the rule does not lean on that.
+    const half = '\ud83d'
+    expect(() => judgeContent({ at: 'text' }, new Y.ContentString(`a${half}`))).toThrow('character pair')
+    const field = { at: 'field', section: 'lines', id: 'trace', field: 'loss' } as const
+    expect(() => judgeContent(field, new Y.ContentAny([`5 dB${half}`]))).toThrow('character pair')
+    expect(() => judgeContent({ at: 'text' }, new Y.ContentString('\ud83d\ude42'))).not.toThrow()
+  })
+
+  it('[W4.4] a run of which a part is known', () => {
+    const shadow = sheet()
+    const parent = note
+    Y.applyUpdate(shadow, one({ parent, ...string('ab') }))
+    expect(judge(one({ parent, ...string('abcd') }), shadow)).toBe('malformed')
   })
 
   it('[W4.4] content under a clock that is known is ignored, so it cannot be acknowledged as new', () => {
