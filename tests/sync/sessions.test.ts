@@ -144,6 +144,15 @@ describe('whose client id', () => {
     )
   })
 
+  it('[W3.23] the id that the seed was written under is nobody’s', async () => {
+    const world = await openWorld()
+    const budget = await world.createBudget()
+    const vera = await Page.open(world, budget, 'vera')
+    const [seedId] = vera.doc.store.clients.keys()
+    await expect(Page.open(world, budget, 'ann', {}, seedId)).rejects.toThrow('4409')
+    expect((await world.journal.head(budget))?.seq).toBe(1)
+  })
+
   it('[W3.23] an older id is bound at its first write if it is free, in the same commit', async () => {
     const world = await openWorld()
     const budget = await world.createBudget()

@@ -2,10 +2,20 @@
 export class Bindings {
   private readonly reserved = new Map<number, string>()
 
-  constructor(private readonly bound: Map<number, string>) {}
+  /** @param isUsed whether the document has content of a client id: an unbound one is the seed's, and stays nobody's */
+  constructor(
+    private readonly bound: Map<number, string>,
+    private readonly isUsed: (clientId: number) => boolean,
+  ) {}
 
-  ownerOf(clientId: number): string | null {
-    return this.bound.get(clientId) ?? this.reserved.get(clientId) ?? null
+  /** Whether nobody has the id yet. */
+  isFree(clientId: number): boolean {
+    return this.ownerOf(clientId) === null && !this.isUsed(clientId)
+  }
+
+  /** Whether the id is the person's, or may become it. */
+  mayUse(clientId: number, person: string): boolean {
+    return this.ownerOf(clientId) === person || this.isFree(clientId)
   }
 
   reserve(clientId: number, person: string): void {
@@ -22,5 +32,9 @@ export class Bindings {
   /** The binding's row was not written: the id is free again. */
   release(clientId: number): void {
     this.reserved.delete(clientId)
+  }
+
+  private ownerOf(clientId: number): string | null {
+    return this.bound.get(clientId) ?? this.reserved.get(clientId) ?? null
   }
 }

@@ -49,16 +49,15 @@ export class Desk {
 }
 
 /**
- * The client id of a person's edits by submit() in a budget: the first of a fixed sequence that nobody else has. It is the
+ * The client id of a person's edits by submit() in a budget: the first of a fixed sequence that the person may use. It is the
  * same after a restart because its binding stands in the journal.
  */
-export function submitClientId(budget: string, person: string, ownerOf: (clientId: number) => string | null): number {
+export function submitClientId(budget: string, person: string, mayUse: (clientId: number) => boolean): number {
   for (let attempt = 0; ; attempt++) {
     const digest = createHash('sha256')
       .update(JSON.stringify(['submit', budget, person, attempt]))
       .digest()
     const clientId = digest.readUInt32BE(0)
-    const owner = ownerOf(clientId)
-    if (owner === null || owner === person) return clientId
+    if (mayUse(clientId)) return clientId
   }
 }

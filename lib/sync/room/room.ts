@@ -66,7 +66,7 @@ export class Room {
     const { journal, sessions, committer, clock, log, engine } = deps
     this.snapshotSeq = loaded.snapshotSeq
     this.peers = new Peers(clock)
-    const bindings = new Bindings(bound)
+    const bindings = new Bindings(bound, (clientId) => Y.getState(loaded.doc.store, clientId) > 0)
     this.chain = new Chain(budget, engine, loaded.head)
     this.roster = new Roster((person) => sessions.role(person, budget), {
       changed: (person, role) => this.roleChanged(person, role),

@@ -48,7 +48,8 @@ export class Submissions {
       answer(refused(asked, { code: 'conflict', reason: 'The budget was changed meanwhile; read it again.' }))
       return
     }
-    const clientId = submitClientId(budget, asked.actor.identity.person, (id) => bindings.ownerOf(id))
+    const { person } = asked.actor.identity
+    const clientId = submitClientId(budget, person, (id) => bindings.mayUse(id, person))
     const update = this.desk.draft(operations, clientId)
     if (!(update instanceof Uint8Array)) {
       answer(refused(asked, update))

@@ -78,11 +78,11 @@ export class WritePath implements Committing {
   /** Gives a client id to a person who may write. @returns false where it is somebody else's */
   bind(actor: Actor, clientId: number): boolean {
     const { bindings, committer } = this.parts
-    const owner = bindings.ownerOf(clientId)
-    if (owner !== null) return owner === actor.identity.person
-    this.queueBind(actor, clientId)
-    committer.request(this)
-    return true
+    if (bindings.isFree(clientId)) {
+      this.queueBind(actor, clientId)
+      committer.request(this)
+    }
+    return bindings.mayUse(clientId, actor.identity.person)
   }
 
   /**
@@ -116,7 +116,7 @@ export class WritePath implements Committing {
   /** Queues what has passed the gate. */
   accept(incoming: Incoming, verdict: Accepted, answer: (answer: Answer) => void): void {
     const { bindings, known, committer, events } = this.parts
-    if (bindings.ownerOf(incoming.clientId) === null) this.queueBind(incoming.actor, incoming.clientId)
+    if (bindings.isFree(incoming.clientId)) this.queueBind(incoming.actor, incoming.clientId)
     const { changes, after } = verdict
     const answered = new Promise<Answer>((resolve) => {
       this.intake.queue({ ...incoming, kind: 'edit', changes, after, answer: resolve })
@@ -225,8 +225,7 @@ export class WritePath implements Committing {
   }
 
   private mayUse({ actor, clientId }: Pick<Incoming, 'actor' | 'clientId'>): boolean {
-    const owner = this.parts.bindings.ownerOf(clientId)
-    return owner === null || owner === actor.identity.person
+    return this.parts.bindings.mayUse(clientId, actor.identity.person)
   }
 
   private queueBind(actor: Actor, clientId: number): void {
