@@ -77,7 +77,7 @@ describe('halfbaud evaluate', () => {
     expect(complaints[0]).toContain("'Slot via' (lines.slot-via), stated loss: A loss is typed as a positive number")
     expect(complaints[1]).toMatch(/lines\.other.*frequency of the stated loss: Add a unit: Hz, kHz, MHz, GHz\./)
     expect(complaints[2]).toMatch(/lines\.other.*'colour'.*take it out/)
-    expect(complaints[3]).toContain("Lane value 'slot-via/1/length': Add a unit")
+    expect(complaints[3]).toContain("'Slot via' (lines.slot-via), lane 1, length: Add a unit")
   })
 
   it.each([
