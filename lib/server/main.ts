@@ -30,6 +30,10 @@ try {
     )
   } else if (config.mode !== 'serve' && existsSync(join(config.directory, 'demo-passwords.txt'))) {
     process.stdout.write(`\nThe passwords of the demo are in ${resolve(config.directory, 'demo-passwords.txt')}.\n`)
+  } else if (config.mode !== 'serve') {
+    process.stdout.write(
+      `\nThe first start of the demo was interrupted. Remove ${config.directory} and start again to have it whole.\n`,
+    )
   } else if (server.ownerCode !== null) {
     process.stdout.write(
       `\nThis server has no owner yet. Enter this code at ${server.url}/owner: ${server.ownerCode}\n`,
