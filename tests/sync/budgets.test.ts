@@ -187,6 +187,33 @@ describe('effects', () => {
     for (const entry of known ?? []) if (entry.seq >= 4) expect(kept.get(entry.seq)).toEqual(entry.effects)
   })
 
+  it('[W5.25] are there for whoever reads the trail after an acknowledgement', async () => {
+    const world = await openWorld()
+    const budget = await world.createBudget()
+    await world.stop()
+    const saving: (() => void)[] = []
+    const again = await world.start((journal) => ({
+      ...journal,
+      saveEffects: async (...asked) => {
+        await new Promise<void>((resolve) => saving.push(resolve))
+        await journal.saveEffects(...asked)
+      },
+    }))
+    const ann = await Page.open(again, budget, 'ann')
+    await ann.answer(ann.edit(setLoss('6 dB')))
+    const reading = again.sync.budgets.trail(budget, { limit: 1 })
+    let isRead = false
+    void reading.then(() => {
+      isRead = true
+    })
+    await expect.poll(() => saving.length).toBe(1)
+    // As many questions to the journal as reading takes, which are answered in turn.
+    for (let asked = 0; asked < 10; asked++) await again.journal.head(budget)
+    expect(isRead).toBe(false)
+    saving[0]?.()
+    expect(await reading).toMatchObject([{ effects: [{ allowance: 'whole' }] }])
+  })
+
   it('[W5.25] an effect that cannot be kept fails nothing else', async () => {
     const world = await openWorld()
     const budget = await world.createBudget()

@@ -5,7 +5,7 @@ import { lossOf, setLoss } from './support/changes'
 import { holdableDisk } from './support/disk'
 import { Page, syncFrame } from './support/page'
 import { editOf, noteOf, putRecord, recordOf } from './support/sheet'
-import { openWorld } from './support/world'
+import { openWorld, PUBLIC_URL } from './support/world'
 
 describe('an edit, from one page to the others', () => {
   it('[W5.21] is acknowledged with its seq and head, shown to the others, and stands in the trail', async () => {
@@ -254,6 +254,45 @@ describe('down', () => {
     ann.received.length = 0
     ann.sendEdit(second, 'second')
     expect(await ann.answer('second')).toHaveProperty('seq')
+  })
+})
+
+describe('fan-out', () => {
+  it('[W5.21] one frame to each other connection; none to the one that has it, none to who has not asked for the document', async () => {
+    const world = await openWorld()
+    const budget = await world.createBudget()
+    const ann = await Page.open(world, budget, 'ann')
+    const ben = await Page.open(world, budget, 'ben')
+    const silent = await Page.dial(`${world.url}${budget}`, { headers: { cookie: 'session=vera' }, origin: PUBLIC_URL })
+    silent.hello('vera')
+    await silent.until((one) => one.type === 'welcome')
+    await ann.answer(ann.edit(setLoss('6 dB')))
+    for (const page of [ann, ben, silent]) await page.until((one) => one.type === 'trail')
+    const updates = (page: Page) => page.all('sync').filter(({ step }) => step === 2).length
+    expect([ann, ben, silent].map(updates)).toEqual([0, 1, 0])
+  })
+
+  it('[W5.22] edits of several people in one commit are one frame', async () => {
+    const disk = holdableDisk()
+    const world = await openWorld({ disk })
+    const budget = await world.createBudget()
+    const ann = await Page.open(world, budget, 'ann')
+    const ben = await Page.open(world, budget, 'ben')
+    const vera = await Page.open(world, budget, 'vera')
+    await ann.answer(ann.edit(setLoss('5.5 dB')))
+    await vera.sees((doc) => lossOf(doc) === '5.5 dB')
+    disk.hold()
+    ann.edit(setLoss('6 dB'))
+    await disk.untilWaiting(1)
+    ann.edit(setLoss('7 dB'))
+    ben.edit(setLoss('3 dB', 'cable'))
+    for (const page of [ann, ben]) await page.asked()
+    vera.received.length = 0
+    await disk.letGo()
+    await vera.sees((doc) => lossOf(doc) === '7 dB' && lossOf(doc, 'cable') === '3 dB')
+    expect(vera.all('sync')).toHaveLength(2)
+    const rows = await world.journal.entries(budget, { after: 0, limit: 100 })
+    expect(rows.filter(({ kind }) => kind === 'edit')).toHaveLength(4)
   })
 })
 

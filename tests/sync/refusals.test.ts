@@ -147,7 +147,7 @@ describe('headers and frames', () => {
     expect(await texting.closed).toMatchObject({ code: 1003 })
   })
 
-  it('[W2.25] an edit of another epoch is refused', async () => {
+  it('[W2.26] an edit of another epoch is refused', async () => {
     const world = await openWorld()
     const budget = await world.createBudget()
     const ann = await Page.open(world, budget, 'ann')

@@ -197,7 +197,7 @@ describe('who may write', () => {
     const bens = ben.edit(setLoss('6 dB'))
     const anns = ann.edit(setLoss('3 dB', 'cable'))
     // An answer to a later question: both are in the queue.
-    for (const page of [ben, ann]) await asked(page)
+    for (const page of [ben, ann]) await page.asked()
     await world.sessions.setRole('ben', budget, 'viewer')
     await disk.letGo()
     expect(await ben.answer(bens)).toMatchObject({ code: 'read-only' })
@@ -220,7 +220,7 @@ describe('who may write', () => {
     await disk.untilWaiting(1)
     ben.edit(setLoss('6 dB'))
     const last = ann.edit(setLoss('3 dB', 'cable'))
-    for (const page of [ben, ann]) await asked(page)
+    for (const page of [ben, ann]) await page.asked()
     const before = performance.now()
     world.sessions.end('session-ben')
     expect((await ben.closed).code).toBe(4401)
@@ -293,7 +293,7 @@ describe('presence', () => {
     const claim = { section: 'lines', id: 'trace', field: 'x'.repeat(2_000) }
     ben.send(encodeMessage({ type: MESSAGE.cell, header: claim }))
     ben.send(encodeMessage({ type: MESSAGE.cell, header: { ...cell, person: 'ann' } as never }))
-    await asked(ben)
+    await ben.asked()
     expect(JSON.stringify(ann.all('presence'))).not.toContain('xxx')
     ann.received.length = 0
     ben.socket.close()
@@ -311,11 +311,11 @@ describe('presence', () => {
     for (let step = 1; step <= 4; step++) {
       timers.advance(15_000)
       // The answer to a ping has come before this one.
-      await asked(ann)
+      await ann.asked()
       expect(ann.received.slice(before).filter(({ type }) => type === 'presence')).toHaveLength(step)
     }
     timers.advance(10_000)
-    await asked(ann)
+    await ann.asked()
     expect(ann.received.slice(before).filter(({ type }) => type === 'presence')).toHaveLength(4)
     expect(ann.socket.readyState).toBe(ann.socket.OPEN)
   })
@@ -330,11 +330,3 @@ describe('presence', () => {
     expect((await ann.closed).code).toBe(4401)
   })
 })
-
-/** Resolves when the server has dealt with everything that the page has sent before. */
-async function asked(page: Page): Promise<void> {
-  const documents = () => page.all('sync').filter(({ step }) => step === 1).length
-  const before = documents()
-  page.askForDocument()
-  await page.until(() => documents() > before)
-}

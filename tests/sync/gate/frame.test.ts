@@ -134,7 +134,7 @@ describe('gaps', () => {
 })
 
 describe('whose client id', () => {
-  it('[W3.4] new structs of an id that is not this person’s, or not the one in the header', () => {
+  it('[W3.24] new structs of an id that is not this person’s, or not the one in the header', () => {
     const update = editOf(copyOf(sheet(), ANN), (doc) => recordOf(doc, 'lines', 'trace').set('loss', '6 dB'))
     expect(judge(update, sheet(), ANN, false)).toBe('foreign-client-id')
     expect(judge(update, sheet(), BEN, true)).toBe('foreign-client-id')

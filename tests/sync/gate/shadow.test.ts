@@ -108,6 +108,18 @@ describe('the merged result', () => {
     expect(shadow.budget.lines.trace?.note).toBe(half)
   })
 
+  it('[W4.4] two blocks of one client id that follow each other: Yjs would keep the second and wait for the first', () => {
+    const { live, shadow } = shadowOver()
+    const origin = idOf(live, 'lines', 'trace', 'loss')
+    const blocks = forge([
+      { client: ANN, clock: 0, structs: [{ origin, ...any('1 dB') }] },
+      { client: ANN, clock: 1, structs: [{ origin: { client: ANN, clock: 0 }, ...any('2 dB') }] },
+    ])
+    expect(refusal(shadow, blocks)).toMatchObject({ code: 'malformed', deep: true })
+    const honest = editOf(copyOf(live, BEN), (doc) => recordOf(doc, 'lines', 'trace').set('loss', '3 dB'))
+    expect(shadow.offer(honest, BEN, true)).toMatchObject({ refused: null, changes: [{ after: '3 dB' }] })
+  })
+
   it('[W4.5] what is accepted stays after a refusal, and is what live becomes', () => {
     const { live, accepted, shadow } = shadowOver()
     const page = copyOf(live, ANN)

@@ -128,6 +128,14 @@ export class Page {
     return this.until(isIt).then((one) => (one as { header: Answer }).header)
   }
 
+  /** Resolves when the server has dealt with everything that was sent before. */
+  async asked(): Promise<void> {
+    const documents = () => this.all('sync').filter(({ step }) => step === 1).length
+    const before = documents()
+    this.askForDocument()
+    await this.until(() => documents() > before)
+  }
+
   /** Resolves when the server has received what was sent, or has closed the socket. */
   async heard(): Promise<void> {
     const ponged = new Promise((resolve) => this.socket.once('pong', resolve))

@@ -66,11 +66,12 @@ export async function openWorld(options: WorldOptions = {}) {
       await onDisk.close()
     }
     closing.push(stop)
-    return { sync, sessions, server, journal: onDisk, url: `ws://127.0.0.1:${port}/collab/`, stop }
+    const url = `ws://127.0.0.1:${port}/collab/`
+    return { sync, sessions, server, journal: onDisk, url, stop, createBudget: () => createBudget(sync, records) }
   }
 
   const first = await start()
-  return { ...first, records, logged, start, createBudget: (sync: Sync = first.sync) => createBudget(sync, records) }
+  return { ...first, records, logged, start }
 }
 
 export type World = Awaited<ReturnType<typeof openWorld>>
