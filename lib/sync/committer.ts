@@ -13,7 +13,10 @@ export type Committing = {
   readonly hasMore: boolean
 }
 
-/** How long an edit waits for others when no commit is in flight, in milliseconds. */
+/**
+ * Commits begin at least this many milliseconds apart, so that edits gather when many come; one that comes after a pause goes
+ * at once.
+ */
 const GATHER = 5
 /** Rows of one commit; the journal takes some 2,000 in one INSERT. */
 const MOST_ROWS = 1_500
@@ -25,6 +28,7 @@ const MOST_ROWS = 1_500
 export class Committer {
   private waiting = new Set<Committing>()
   private running: Promise<void> | null = null
+  private begun = Number.NEGATIVE_INFINITY
 
   constructor(
     private readonly journal: Pick<Journal, 'append'>,
@@ -43,8 +47,12 @@ export class Committer {
   }
 
   private async run(): Promise<void> {
-    await new Promise<void>((resolve) => this.clock.after(GATHER, resolve))
-    while (this.waiting.size > 0) await this.commit()
+    while (this.waiting.size > 0) {
+      const wait = Math.min(GATHER, Math.max(0, this.begun + GATHER - this.clock.now()))
+      await new Promise<void>((resolve) => this.clock.after(wait, resolve))
+      this.begun = this.clock.now()
+      await this.commit()
+    }
     // At once, not in a later microtask: a request in between would be forgotten.
     this.running = null
   }

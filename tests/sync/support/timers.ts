@@ -2,7 +2,7 @@ import { systemTimers, type Timers } from '../../../lib/sync/clock'
 
 /**
  * Timers that go when the test says so.
- * @param realUpTo delays up to this many milliseconds pass by themselves: a commit gathers for 5 ms
+ * @param realUpTo delays up to this many milliseconds pass by themselves: a commit gathers for up to 5 ms; -1: none do
  */
 export function heldTimers(realUpTo = 0): Timers & { now(): number; advance(milliseconds: number): void } {
   let now = 1_800_000_000_000
