@@ -31,7 +31,8 @@ export function FlagsPanel() {
             <button type="button" onClick={() => goTo({ section: flag.section, id: flag.id, field: flag.field })}>
               Go there
               <span className={css.unseen}>
-                : {RECORD_WORDS[flag.section]} {recordName(budget, flag.section, flag.id)}
+                : {flag.section !== 'shares' && `${RECORD_WORDS[flag.section]} `}
+                {recordName(budget, flag.section, flag.id)}
               </span>
             </button>
           </li>

@@ -21,8 +21,17 @@ export function recordName(budget: Budget, section: 'head' | SectionName, id: st
   if (section === 'head' || id === null) return budget.head.name ?? 'the budget'
   const plane = section === 'planes' ? budget.planes[id] : undefined
   if (plane) return planeWords(plane)
+  const share = section === 'shares' ? budget.shares[id] : undefined
+  if (share) return `share of ${shareHolder(budget, share)}`
   const record: Readonly<Record<string, Scalar>> | undefined = budget[section][id]
   if (!record) return `unknown ${RECORD_WORDS[section]}`
   const name = record.name ?? record.discipline
   return typeof name === 'string' && name !== '' ? name : `${RECORD_WORDS[section]} without a name`
+}
+
+/** Whom a share is given to. */
+function shareHolder(budget: Budget, { assembly, line, discipline }: Budget['shares'][string]): string {
+  if (assembly !== null) return recordName(budget, 'assemblies', assembly)
+  if (line !== null) return recordName(budget, 'lines', line)
+  return discipline === null ? 'nobody yet' : wordOf(discipline)
 }
