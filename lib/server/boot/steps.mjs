@@ -22,7 +22,7 @@ export async function installPackages({ requireToolchain }) {
   // node-gyp would fetch Node's headers; they lie beside Node itself in every ordinary installation.
   if (existsSync(join(nodeHeaders, 'include/node/node.h'))) environment.npm_config_nodedir = nodeHeaders
   if (!process.env.HOME) environment.npm_config_cache = mkdtempSync(join(tmpdir(), 'halfbaud-npm-'))
-  await step('install', 'Installing packages; SQLite is compiled twice (about 3 minutes on two cores)', INSTALL, {
+  await step('install', 'Installing packages; SQLite is compiled twice (3 to 6 minutes on two cores)', INSTALL, {
     command: 'npm',
     args: ['ci', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error'],
     environment,
