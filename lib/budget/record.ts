@@ -24,7 +24,8 @@ export function compareOrder(orderA: string, idA: string, orderB: string, idB: s
 }
 
 /** What one record of each section is called. */
-const SINGULAR: Readonly<Record<SectionName, string>> = {
+export const RECORD_WORDS: Readonly<Record<'head' | SectionName, string>> = {
+  head: 'budget',
   assemblies: 'assembly',
   lossClasses: 'loss class',
   layers: 'layer',
@@ -35,14 +36,14 @@ const SINGULAR: Readonly<Record<SectionName, string>> = {
   corners: 'corner',
   evidence: 'evidence',
   figures: 'figure',
-  signOffs: 'sign-off',
+  signOffs: 'required sign-off',
 }
 
 /** A record as messages name it: by its name, or by its id where it has none. */
 export function nameOf(section: SectionName | 'head', id: string | null, record: object | null): string {
   if (section === 'head') return 'The link'
   const name = record !== null && 'name' in record && typeof record.name === 'string' ? record.name.trim() : ''
-  return name === '' ? `${SINGULAR[section]} without a name (${id})` : `'${name}'`
+  return name === '' ? `${RECORD_WORDS[section]} without a name (${id})` : `'${name}'`
 }
 
 /** What a field is, in the schema's words, to stand inside a sentence. */

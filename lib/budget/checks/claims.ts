@@ -4,6 +4,7 @@ import { livingRecord, nameOf } from '../record'
 import { type Budget, COVERS } from '../schema'
 import { spreadOf, toleranceOf } from '../tolerance'
 import type { Check } from './check'
+import { lineFlag } from './lineFlag'
 
 /** A typical value below this many decibels is too small to matter. */
 const TYPICAL_MATTERS_DB = 0.5
@@ -24,7 +25,7 @@ function* grades(item: LineItem, nominal: number | null): Generator<FlagDraft> {
   const spread = spreadOf(tolerance, nominal ?? 1, 0)
   const raised = typeof spread !== 'string' && spread.highExtreme > 0
   if (grade === 'maximum' && raised) {
-    yield flag(
+    yield lineFlag(
       item,
       'maximum-with-tolerance',
       'tolerancePlus',
@@ -33,7 +34,7 @@ function* grades(item: LineItem, nominal: number | null): Generator<FlagDraft> {
     )
   }
   if (item.line.processIncluded && raised) {
-    yield flag(
+    yield lineFlag(
       item,
       'process-with-tolerance',
       'processIncluded',
@@ -43,7 +44,7 @@ function* grades(item: LineItem, nominal: number | null): Generator<FlagDraft> {
   }
   if (grade === 'typical' && nominal !== null && nominal > TYPICAL_MATTERS_DB) {
     const source = basisOf(item)
-    yield flag(
+    yield lineFlag(
       item,
       'typical-not-maximum',
       'grade',
@@ -55,7 +56,7 @@ function* grades(item: LineItem, nominal: number | null): Generator<FlagDraft> {
 
 function* groups(item: LineItem): Generator<FlagDraft> {
   if (!groupOffWithoutNote(item.line)) return
-  yield flag(
+  yield lineFlag(
     item,
     'group-off-without-note',
     'groupNote',
@@ -72,13 +73,13 @@ function* coverCodes(item: LineItem): Generator<FlagDraft> {
   if (kind === null) return
   if (covers === null) {
     if (!MUST_SAY.includes(kind)) return
-    yield flag(item, 'covers-not-said', 'covers', 'does not say what its number includes.', 'Tick what it covers.')
+    yield lineFlag(item, 'covers-not-said', 'covers', 'does not say what its number includes.', 'Tick what it covers.')
     return
   }
   const known: readonly string[] = COVERS[kind]
   const foreign = covers.split(' ').filter((code) => code !== '' && !known.includes(code))
   if (foreign.length === 0) return
-  yield flag(
+  yield lineFlag(
     item,
     'covers-not-of-kind',
     'covers',
@@ -95,22 +96,11 @@ function* fixtures(budget: Budget, item: LineItem): Generator<FlagDraft> {
   const overlaps = Object.values(budget.lines).filter(({ kind, removed }) => kind === 'overlap' && !removed)
   if (overlaps.some(({ overlapA, overlapB }) => overlapA === item.id || overlapB === item.id)) return
   const why = said ? 'its number covers them' : `its file ${nameOf('evidence', item.line.evidence, evidence)} says so`
-  yield flag(
+  yield lineFlag(
     item,
     'fixtures-in',
     said ? 'covers' : 'evidence',
     `contains test fixtures: ${why}.`,
     'Take the number with the fixtures removed, or subtract them by an overlap line that names both lines.',
   )
-}
-
-function flag(item: LineItem, code: FlagDraft['code'], field: string, message: string, todo: string): FlagDraft {
-  return {
-    code,
-    section: 'lines',
-    id: item.id,
-    field,
-    message: `${nameOf('lines', item.id, item.line)} ${message}`,
-    todo,
-  }
 }

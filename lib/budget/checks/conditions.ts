@@ -1,8 +1,8 @@
 import { cornerFactor, holdsIn } from '../corner'
 import type { FlagDraft } from '../flags'
 import type { LineItem } from '../lineItem'
-import { nameOf } from '../record'
 import type { Check } from './check'
+import { lineFlag } from './lineFlag'
 
 /** Numbers that hold in other conditions than they are counted in. */
 export const conditions: Check = function* ({ context, judged }) {
@@ -14,9 +14,10 @@ export const conditions: Check = function* ({ context, judged }) {
       const holds = holdsIn(item.line, item.lossClass)
       const factor = cornerFactor(item.line, item.lossClass, corner)
       if (holds.grade !== 'maximum' || holds.temperature !== null || typeof factor === 'string' || factor <= 1) continue
-      yield flag(
+      yield lineFlag(
         item,
         'maximum-through-corner',
+        'conditionTemperature',
         `is a guaranteed maximum that does not say its temperature, and was put through the corner ${corner.name}.`,
         'Type the temperature that the maximum holds at; a maximum over temperature already contains the corner.',
       )
@@ -30,15 +31,11 @@ function* otherThanReference(item: LineItem, reference: number | null): Generato
   if (!warm && humidity !== 'wet') return
   const holds = [warm ? `at ${temperature} °C` : '', humidity === 'wet' ? 'wet' : ''].filter(Boolean).join(' and ')
   const corner = reference === null ? 'dry' : `${reference} °C, dry`
-  yield flag(
+  yield lineFlag(
     item,
     'other-conditions',
+    'conditionTemperature',
     `holds ${holds}; in the reference corner (${corner}) it counts as it is.`,
     'Give the number in the conditions of the reference corner.',
   )
-}
-
-function flag(item: LineItem, code: FlagDraft['code'], message: string, todo: string): FlagDraft {
-  const name = nameOf('lines', item.id, item.line)
-  return { code, section: 'lines', id: item.id, field: 'conditionTemperature', message: `${name} ${message}`, todo }
 }

@@ -5,6 +5,7 @@ import type { FlagDraft } from '../flags'
 import type { LineItem } from '../lineItem'
 import { nameOf, recordOf } from '../record'
 import type { Check } from './check'
+import { lineFlag } from './lineFlag'
 
 /** Overlap and reserve lines. */
 export const special: Check = function* ({ context, judged, lines }) {
@@ -15,7 +16,7 @@ export const special: Check = function* ({ context, judged, lines }) {
     for (const named of [item.line.overlapA, item.line.overlapB]) {
       const whole = named === null ? null : (lines.get(named)?.loss.nominalDb ?? null)
       if (own === null || whole === null || own <= whole) continue
-      yield flag(
+      yield lineFlag(
         item,
         'overlap-too-large',
         'loss',
@@ -28,7 +29,7 @@ export const special: Check = function* ({ context, judged, lines }) {
     for (const item of span.items) {
       const clash = item.line.kind === 'reserve' ? clashOf(item, conditions, allowance.judgedCorner !== null) : null
       if (clash === null) continue
-      yield flag(
+      yield lineFlag(
         item,
         'reserve-and-corner',
         'purpose',
@@ -41,7 +42,7 @@ export const special: Check = function* ({ context, judged, lines }) {
 
 function* overlaps(context: Context, item: LineItem, judged: readonly Judged[]): Generator<FlagDraft> {
   if (overlapIn(context, item, new Set()) === 'unnamed') {
-    yield flag(
+    yield lineFlag(
       item,
       'overlap-unnamed',
       item.line.overlapA === null ? 'overlapA' : 'overlapB',
@@ -53,7 +54,7 @@ function* overlaps(context: Context, item: LineItem, judged: readonly Judged[]):
   for (const { span, evaluation } of judged) {
     const between = new Set(span.items.map(({ id }) => id))
     if (!between.has(item.id) || overlapIn(context, item, between) === 'subtracts') continue
-    yield flag(
+    yield lineFlag(
       item,
       'overlap-outside-planes',
       'overlapA',
@@ -71,15 +72,4 @@ function clashOf(item: LineItem, conditions: Judged['conditions'], corner: boole
     return conditions.statistic === 'worst' ? 'at the worst case of all tolerances' : 'with the tolerances (RSS)'
   }
   return null
-}
-
-function flag(item: LineItem, code: FlagDraft['code'], field: string, message: string, todo: string): FlagDraft {
-  return {
-    code,
-    section: 'lines',
-    id: item.id,
-    field,
-    message: `${nameOf('lines', item.id, item.line)} ${message}`,
-    todo,
-  }
 }

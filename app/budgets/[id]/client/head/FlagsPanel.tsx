@@ -1,7 +1,7 @@
 'use client'
 import type { Flag } from '../../../../../lib/budget/evaluation'
+import { RECORD_WORDS } from '../../../../../lib/budget/record'
 import { useLook, useReading } from '../state/contexts'
-import { RECORD_WORDS } from '../words/labels'
 import { recordName } from '../words/say'
 import css from './flags.module.css'
 

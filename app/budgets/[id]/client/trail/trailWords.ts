@@ -1,9 +1,10 @@
+import { RECORD_WORDS } from '../../../../../lib/budget/record'
 import type { Budget, SectionName, Verdict } from '../../../../../lib/budget/schema'
 import type { Change } from '../../../../../lib/sheet/change'
 import type { Effect, TrailEntry } from '../../../../../lib/sheet/wire'
 import { signedDecibels } from '../../../../words/decibels'
 import { VERDICT_WORD } from '../../../../words/terms'
-import { labelOf, RECORD_WORDS } from '../words/labels'
+import { labelOf } from '../words/labels'
 import { recordName, sayValue } from '../words/say'
 
 /** One thing that an entry did, in words: whose field, and from what to what. */

@@ -234,22 +234,6 @@ export const LABELS: Readonly<Record<'head' | SectionName, Labels>> = {
   signOffs: { order, removed, discipline: 'discipline' },
 }
 
-/** One record of a section, in words: 'line', 'plane'. */
-export const RECORD_WORDS: Readonly<Record<'head' | SectionName, string>> = {
-  head: 'budget',
-  assemblies: 'assembly',
-  lossClasses: 'loss class',
-  layers: 'layer',
-  lines: 'line',
-  planes: 'plane',
-  allowances: 'allowance',
-  shares: 'share',
-  corners: 'corner',
-  evidence: 'evidence',
-  figures: 'figure',
-  signOffs: 'required sign-off',
-}
-
 /** The label of a field; a lane's value ('lane/field') is named by its lane. */
 export function labelOf(section: 'head' | SectionName | 'laneValues', field: string): string {
   if (section === 'laneValues') {

@@ -1,8 +1,8 @@
+import { RECORD_WORDS } from '../../../../../lib/budget/record'
 import type { Budget, Scalar, SectionName } from '../../../../../lib/budget/schema'
 import { metaOf } from '../../../../../lib/sheet/layout'
 import { planeWords } from '../../../../words/terms'
 import { wordOf } from './choices'
-import { RECORD_WORDS } from './labels'
 
 /** A value as a person reads it: as typed, or the word of its code, or the name of the record that it points to. */
 export function sayValue(budget: Budget, section: 'head' | SectionName | 'laneValues', field: string, value: Scalar) {
