@@ -48,7 +48,7 @@ export function LevelDiagram(props: LevelDiagramProps) {
 
   return (
     <figure className={css.figure}>
-      <figcaption className={css.said}>{words}</figcaption>
+      <figcaption className="unseen">{words}</figcaption>
       {narrow && (
         <Landing evaluation={evaluation} budget={budget} allowance={allowance} was={was} width={width} height={150} />
       )}

@@ -2,10 +2,11 @@ import Link from 'next/link'
 import type { AllowanceEvaluation } from '../../lib/budget/evaluation'
 import type { Budget } from '../../lib/budget/schema'
 import type { BudgetSummary } from '../../lib/sync/services'
-import { When } from '../budgets/[id]/client/words/When'
 import { BasisStrip } from '../diagram/BasisStrip'
 import { Landing } from '../diagram/Landing'
 import { VerdictMark } from '../marks/VerdictMark'
+import colour from '../marks/verdictColour.module.css'
+import { When } from '../words/client/When'
 import { headline, judgedWords } from '../words/judged'
 import css from './home.module.css'
 import { pastShares } from './pastShares'
@@ -75,7 +76,7 @@ function Deciding({
   return (
     <>
       <div className={css.margin}>
-        <p className={css[summary.verdict]}>
+        <p className={colour[summary.verdict]}>
           <span className={css.figure}>{figure}</span> {unit}
         </p>
         <p className={css.conditions}>{judgedWords(allowance, budget)}</p>

@@ -2,6 +2,7 @@ import type { Verdict } from '../../lib/budget/schema'
 import { VERDICT_WORD } from '../words/terms'
 import { Mark } from './Mark'
 import css from './marks.module.css'
+import colour from './verdictColour.module.css'
 
 type Props = {
   readonly verdict: Verdict
@@ -44,7 +45,7 @@ const SHAPE: Readonly<Record<Verdict, React.ReactNode>> = {
 export function VerdictMark({ verdict, size = 18, word = true, stacked = false }: Props) {
   const text = typeof word === 'string' ? word : VERDICT_WORD[verdict]
   return (
-    <span className={`${css.verdict} ${css[verdict]} ${stacked ? css.stacked : ''}`}>
+    <span className={`${css.verdict} ${colour[verdict]} ${stacked ? css.stacked : ''}`}>
       <Mark
         label={word === false ? text : null}
         width={(size * 28) / 18}

@@ -1,8 +1,8 @@
 'use client'
 import { useState } from 'react'
-import { When } from '../../budgets/[id]/client/words/When'
 import { callApi } from '../../form/client/callApi'
 import form from '../../form/form.module.css'
+import { When } from '../../words/client/When'
 import { TokenForm } from './TokenForm'
 import { isToken, type Token } from './token'
 

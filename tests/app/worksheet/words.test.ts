@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { wordOf } from '../../../app/budgets/[id]/client/words/choices'
 import { LABELS, labelOf } from '../../../app/budgets/[id]/client/words/labels'
-import { readableTime } from '../../../app/budgets/[id]/client/words/readerTime'
+import { readableTime } from '../../../app/words/client/readerTime'
 import { fieldsOf, metaOf, SECTION_NAMES } from '../../../lib/sheet/layout'
 
 const sections = ['head', ...SECTION_NAMES] as const

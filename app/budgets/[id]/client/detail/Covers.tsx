@@ -32,7 +32,7 @@ export function Covers({ id, line }: { id: string; line: Line }) {
         data-unsaved={unsaved || undefined}
         tabIndex={-1}
       >
-        <legend className={css.unseen}>Covers</legend>
+        <legend className="unseen">Covers</legend>
         <Standing others={others} />
         {codes.map((code) => (
           <label key={code}>

@@ -13,10 +13,10 @@ type Props = {
 export function Announcer({ said, refusal, onHeard }: Props) {
   return (
     <>
-      <p aria-live="polite" className={css.unseen}>
+      <p aria-live="polite" className="unseen">
         {said}
       </p>
-      <div role="alert" className={refusal === null ? css.unseen : css.refusal}>
+      <div role="alert" className={refusal === null ? 'unseen' : css.refusal}>
         {refusal !== null && (
           <>
             {refusal}{' '}

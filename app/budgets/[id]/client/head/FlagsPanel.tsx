@@ -30,7 +30,7 @@ export function FlagsPanel() {
             <strong title={WORD[flag.severity]}>{flag.severity}</strong> {flag.message} {flag.todo}{' '}
             <button type="button" onClick={() => goTo({ section: flag.section, id: flag.id, field: flag.field })}>
               Go there
-              <span className={css.unseen}>
+              <span className="unseen">
                 : {flag.section !== 'shares' && `${RECORD_WORDS[flag.section]} `}
                 {recordName(budget, flag.section, flag.id)}
               </span>

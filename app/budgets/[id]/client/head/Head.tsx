@@ -1,5 +1,6 @@
 'use client'
 import { VerdictMark } from '../../../../marks/VerdictMark'
+import colour from '../../../../marks/verdictColour.module.css'
 import { headline } from '../../../../words/judged'
 import { FieldSlip } from '../slips/FieldSlip'
 import { fieldSlip } from '../slips/spec'
@@ -16,7 +17,7 @@ export function Head({ state, glance }: { state: SheetState; glance: boolean }) 
   const name = budget.head.name ?? 'Budget without a name'
   return (
     <header className={css.head} data-compact={glance || undefined}>
-      <h1 className={css.unseen}>{name}</h1>
+      <h1 className="unseen">{name}</h1>
       <div className={css.title}>
         <FieldSlip spec={fieldSlip('head', null, 'name', budget.head.name)} hideLabel of="the budget" />
       </div>
@@ -47,7 +48,7 @@ function Glance() {
         return (
           <li key={allowance.id} title={allowance.words}>
             <VerdictMark verdict={allowance.verdict} size={14} />
-            <span className={`${css.glanceFigure} ${css[allowance.verdict]}`}>{figure}</span>
+            <span className={`${css.glanceFigure} ${colour[allowance.verdict]}`}>{figure}</span>
             <span className={css.glanceUnit}>{unit}</span>
           </li>
         )

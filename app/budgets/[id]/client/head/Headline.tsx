@@ -1,6 +1,7 @@
 'use client'
 import type { AllowanceEvaluation } from '../../../../../lib/budget/evaluation'
 import { VerdictMark } from '../../../../marks/VerdictMark'
+import colour from '../../../../marks/verdictColour.module.css'
 import { decibels, frequencyWords } from '../../../../words/decibels'
 import { headline, judgedWords } from '../../../../words/judged'
 import { planeWords } from '../../../../words/terms'
@@ -30,8 +31,8 @@ function Headline({ allowance }: { allowance: AllowanceEvaluation }) {
     <section className={css.headline} aria-label={`Verdict of ${allowance.name || 'an allowance without a name'}`}>
       <p className={css.margin}>
         <VerdictMark verdict={verdict} size={28} stacked />
-        <span className={`${css.marginFigure} ${css[verdict]}`}>{figure}</span>
-        <span className={`${css.marginUnit} ${css[verdict]}`}>{unit}</span>
+        <span className={`${css.marginFigure} ${colour[verdict]}`}>{figure}</span>
+        <span className={`${css.marginUnit} ${colour[verdict]}`}>{unit}</span>
       </p>
       <p className={css.strong}>{judgedWords(allowance, budget)}</p>
       <p className={css.quiet}>{[allowance.name, sentence, span(allowance, budget)].filter(Boolean).join(' · ')}</p>

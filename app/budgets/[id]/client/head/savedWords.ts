@@ -1,5 +1,5 @@
+import { clockTime } from '../../../../words/client/readerTime'
 import type { SheetState } from '../state/sheet'
-import { clockTime } from '../words/readerTime'
 
 export type Saved = {
   readonly title: string

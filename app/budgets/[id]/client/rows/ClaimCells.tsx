@@ -47,7 +47,7 @@ export function ClaimCells({ id, line, of, facts }: Props) {
         {flags > 0 && (
           <span className={problems > 0 ? css.problem : css.notice}>
             <span aria-hidden="true">{flags}</span>
-            <span className={css.unseen}>{`${flags} to look at, ${problems} of them problems`}</span>
+            <span className="unseen">{`${flags} to look at, ${problems} of them problems`}</span>
           </span>
         )}
       </GoCell>

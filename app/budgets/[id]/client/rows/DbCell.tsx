@@ -28,7 +28,7 @@ export function DbCell({ facts, scaleDb }: { facts: LineFacts; scaleDb: number }
       <span className={css.figure}>
         {grade === 'typical' && <TypicalWave named />}
         {outside ? `(${decibels(db)})` : decibels(db)}
-        <span className={css.unseen}> dB</span>
+        <span className="unseen"> dB</span>
       </span>
       <BasisStroke basis={basis} length={length} />
     </Cell>

@@ -32,7 +32,7 @@ export function GoCell({ id, field, label, className = '', children }: Props) {
         go()
       }}
     >
-      <span className={css.unseen}>{label} </span>
+      <span className="unseen">{label} </span>
       <span className={css.value}>{children}</span>
     </Cell>
   )

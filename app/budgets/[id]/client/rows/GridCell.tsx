@@ -74,7 +74,7 @@ export function GridCell({ spec, of, children, className = '', look }: Props) {
         />
       ) : (
         <>
-          <span className={css.unseen}>{spec.label} </span>
+          <span className="unseen">{spec.label} </span>
           <span className={css.value}>
             {children ?? (spec.text || <span className={css.empty}>{spec.label}</span>)}
           </span>

@@ -39,7 +39,7 @@ export function RowHead({ section, id, label, children, onRemove }: Props) {
         openDetail(true)
       }}
     >
-      <span className={css.unseen}>{label}</span>
+      <span className="unseen">{label}</span>
       <span aria-hidden="true">{children}</span>
       <span aria-hidden="true" className={css.more}>
         detail

@@ -1,7 +1,7 @@
 'use client'
 import type { TrailEntry } from '../../../../../lib/sheet/wire'
+import { When } from '../../../../words/client/When'
 import { useLook, useReading } from '../state/contexts'
-import { When } from '../words/When'
 import css from './trail.module.css'
 import { deedsOf, effectWords } from './trailWords'
 
@@ -25,7 +25,7 @@ export function EntryItem({ entry }: { entry: TrailEntry }) {
         {effects.map(({ allowance, figure, sign, said }) => (
           <span key={allowance} className={css[sign]} title={said}>
             {figure}
-            <span className={css.unseen}> dB, {said}</span>
+            <span className="unseen"> dB, {said}</span>
           </span>
         ))}
         {effects.length === 0 && <span className={css.none}>no change of a margin</span>}

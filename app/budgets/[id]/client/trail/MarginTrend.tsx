@@ -1,9 +1,9 @@
 'use client'
 import { lazy, Suspense, useId, useMemo, useState } from 'react'
 import type { TrailEntry } from '../../../../../lib/sheet/wire'
+import { When } from '../../../../words/client/When'
 import { decibels, plainDecibels } from '../../../../words/decibels'
 import { useReading, useView } from '../state/contexts'
-import { When } from '../words/When'
 import { marginSteps, type Step } from './margins'
 import css from './trail.module.css'
 
@@ -37,7 +37,7 @@ export function MarginTrend({ entries }: { entries: readonly TrailEntry[] }) {
           <strong>{stepWords(step)}</strong> {step.personName} · <When time={step.time} />
         </p>
       )}
-      <label className={css.unseen} htmlFor={id}>
+      <label className="unseen" htmlFor={id}>
         Entry of the trail
       </label>
       <input
