@@ -1,3 +1,4 @@
+import type { Network } from '../channel/networks/network'
 import type { FlagDraft, Severity } from './flags'
 import type { Basis, Grade, Owner, Statistic, Verdict } from './schema'
 
@@ -109,5 +110,9 @@ export type ShareUse = {
 /** Something to know about a record: a closed list of codes (flags.ts), with what to do. */
 export type Flag = FlagDraft & { readonly severity: Severity }
 
-/** Loss data of evidence files, by SHA-256, for evaluate(). Empty until networks are computed. */
-export type EvidenceData = ReadonlyMap<string, unknown>
+/**
+ * The networks in the evidence files, by SHA-256, for evaluate(): read beforehand, off the main thread. A file that could not
+ * be read says why in one sentence; one that is not in the map has not been read yet.
+ */
+export type EvidenceData = ReadonlyMap<string, EvidenceNetwork>
+export type EvidenceNetwork = { readonly network: Network } | { readonly problem: string }

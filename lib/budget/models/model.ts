@@ -1,6 +1,7 @@
-import type { LossAt } from '../evaluation'
+import type { EvidenceData, LossAt } from '../evaluation'
 import type { Findings } from '../findings'
-import type { Line, LossClass } from '../schema'
+import type { Budget, Line, LossClass } from '../schema'
+import type { Computed, Surroundings } from './piece'
 
 /** What a model may know. */
 export type ModelInput = {
@@ -10,7 +11,12 @@ export type ModelInput = {
   /** The loss class that the line names, and its fields; null where it names none that exists. */
   readonly lossClass: LossClass | null
   readonly classFields: Findings<'lossClasses'> | null
-  /** Hz that the loss is asked at. */
+  /** Layers of the line's assembly, evidence records: read only through livingRecord and inOrder. */
+  readonly budget: Budget
+  readonly evidence: EvidenceData
+  /** What a computed model recomputes its physics in. */
+  readonly surroundings: Surroundings
+  /** Hz that the loss is asked at. A computed model answers for all frequencies and does not read it. */
   readonly hz: number
   /** Ω, differential; null where the budget does not say it. */
   readonly reference: number | null
@@ -26,5 +32,8 @@ export type ModelLoss = {
   readonly spreadDb: number
 }
 
-/** Finds the loss, or writes down in the findings why there is none and answers null. */
-export type Model = (input: ModelInput) => ModelLoss | null
+/**
+ * Finds the loss at the frequency, or a piece computed from its physics that is asked at any; or writes down in the findings
+ * why there is neither and answers null.
+ */
+export type Model = (input: ModelInput) => ModelLoss | Computed | null

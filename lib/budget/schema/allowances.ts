@@ -18,6 +18,11 @@ export const allowance = z.strictObject({
   name: text(120, 'Name of the allowance.'),
   limit: quantity('loss', { min: 0, max: 200 }, 'Loss allowed.'),
   at: quantity('frequency', { min: 1e5, max: 3e11, unit: 'GHz' }, 'Frequency that the limit is stated at.'),
+  usedAt: quantity(
+    'frequency',
+    { min: 1e5, max: 3e11, unit: 'GHz' },
+    'Frequency that the limit is used at instead; it is moved along its own curve, never otherwise.',
+  ),
   from: reference('planes', 'Plane that it starts at.'),
   to: reference('planes', 'Plane that it ends at.'),
   publishedFrom: choice(PLANE_CODES, 'Plane that the source starts it at.'),
@@ -61,5 +66,12 @@ export const corner = z.strictObject({
     { min: -0.02, max: 0.02 },
     'Growth of trace and cable loss per kelvin, if typed and not computed.',
   ),
+  dielectricPerKelvin: quantity(
+    'perKelvin',
+    { min: -0.02, max: 0.02 },
+    'Growth of the loss tangent per kelvin, for lines that are computed from their cross-section.',
+  ),
+  wetDk: quantity('number', { min: 0, max: 2 }, 'Added to Dk from dry to wet, for computed lines.'),
+  wetDf: quantity('number', { min: 0, max: 0.05 }, 'Added to Df from dry to wet, for computed lines.'),
   lossWet: quantity('ratio', { min: 0, max: 1 }, 'Growth of trace loss from dry to wet, if typed and not computed.'),
 })

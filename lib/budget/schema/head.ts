@@ -19,11 +19,13 @@ export const head = z.strictObject({
   codingLineBits: integer(1, 4096, 'Block code: bits sent (257 in 256b/257b).'),
   fecMessage: integer(1, 65535, 'FEC: message symbols (514 in RS(544,514)).'),
   fecCodeword: integer(1, 65535, 'FEC: code word symbols (544 in RS(544,514)).'),
+  edgeTime: quantity('time', { min: 1e-13, max: 1e-8, unit: 'ps' }, 'Edge of the transmitter from 20 % to 80 %.'),
   reference: quantity(
     'resistance',
     { min: 10, max: 200 },
     'Differential reference impedance of every two-port in this budget.',
   ),
   laneCount: integer(1, 256, 'Lanes of the link.'),
+  seed: integer(1, 2147483647, 'Seed of the random builds, so that they can be drawn again; empty: 1.'),
   referenceTemperature: quantity('temperature', { min: -60, max: 200 }, 'Temperature of the reference corner.'),
 })
