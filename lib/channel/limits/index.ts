@@ -1,0 +1,5 @@
+export { limitAt } from './limitAt'
+export { parseCurve } from './parseCurve'
+export type { LimitCurve, LimitPiece } from './piece'
+export { type CurveMiss, worstAgainst } from './worstAgainst'
+export { writeCurve } from './writeCurve'
