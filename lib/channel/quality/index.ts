@@ -1,0 +1,6 @@
+export { type Causality, causality } from './causality'
+export type { Grade, Metric } from './grade'
+export { largestElement } from './largestElement'
+export { type Passivity, passivity } from './passivity'
+export { type Reciprocity, reciprocity } from './reciprocity'
+export { type ThroughFacts, throughFacts } from './throughFacts'
