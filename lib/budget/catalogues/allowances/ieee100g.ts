@@ -1,0 +1,88 @@
+import { overlap, part, publishedBy } from './published'
+import { NO_CLAUSE_SEEN } from './words'
+
+const LANE = { bitRate: '106.25 Gb/s', code: 'PAM4', nyquist: '26.5625 GHz', at: '26.5625 GHz' } as const
+const DRAFT = { bitRate: '212.5 Gb/s', code: 'PAM4', nyquist: '53.125 GHz', at: '53.125 GHz' } as const
+
+/** IEEE 802.3, lanes of 106.25 Gb/s, and of 212.5 Gb/s in draft. */
+export const ieee100g = publishedBy('IEEE 802.3', {
+  'ieee-100g-kr1': {
+    ...LANE,
+    name: '100GBASE-KR1, 200GBASE-KR2, 400GBASE-KR4',
+    clause: '802.3ck Clause 163; objectives of March 2018',
+    limit: '28 dB',
+    publishedFrom: 'tp0',
+    publishedTo: 'tp5',
+    presumes: 'Connectors between the planes included; the packages lie outside.',
+    confidence: 'read',
+    status: 'recommended; COM and ERL are the requirement',
+    caution: NO_CLAUSE_SEEN,
+  },
+  'ieee-100g-cr1': {
+    ...LANE,
+    name: '100GBASE-CR1, 200GBASE-CR2, 400GBASE-CR4 channel',
+    clause: '802.3ck Clause 162, Annex 162A',
+    limit: '28.5 dB',
+    publishedFrom: 'tp0',
+    publishedTo: 'tp5',
+    presumes: 'Connectors between the planes included; the packages lie outside.',
+    confidence: 'from-memory',
+    status: 'recommended for the channel; normative for the cable',
+    split: [
+      part('Cable assembly, TP1 to TP4', '19.75 dB'),
+      part('Host of the transmitter, TP0 to TP2', '10.975 dB'),
+      part('Host of the receiver, TP3 to TP5', '10.975 dB'),
+      overlap("Mated fixture at the transmitter's end", '6.6 dB'),
+      overlap("Mated fixture at the receiver's end", '6.6 dB'),
+    ],
+    caution: 'Hosts and cable both contain the mated fixtures, which are therefore subtracted once at each end.',
+  },
+  'ieee-100gaui-c2c': {
+    ...LANE,
+    name: '100GAUI-1 chip to chip',
+    clause: '802.3ck Annex 120F',
+    limit: '20 dB',
+    publishedFrom: 'tp0',
+    publishedTo: 'tp5',
+    presumes: 'At most one connector between the planes; the packages lie outside.',
+    confidence: 'from-memory',
+    status: 'recommended',
+  },
+  'ieee-100gaui-c2m': {
+    ...LANE,
+    name: '100GAUI-1 chip to module',
+    clause: '802.3ck Annex 120G',
+    limit: '16 dB',
+    publishedFrom: 'tx-ball',
+    publishedTo: 'module-ball',
+    eitherWay: true,
+    presumes: 'Connector between the planes included.',
+    confidence: 'read',
+    status: 'budget',
+    caution: `The frequency is presumed in the text read. ${NO_CLAUSE_SEEN}`,
+  },
+  'ieee-200g-kr1': {
+    ...DRAFT,
+    name: '200GBASE-KR1, 400GBASE-KR2, 800GBASE-KR4, 1.6TBASE-KR8',
+    clause: 'P802.3dj D3.2 (draft) 178.10.2',
+    limit: '40 dB',
+    publishedFrom: 'tp0d',
+    publishedTo: 'tp5d',
+    presumes: 'Die to die: both packages and the connectors between the planes included.',
+    confidence: 'two-sources',
+    status: 'draft; recommended; COM and ERL are the requirement',
+    caution: 'From die to die: not to be compared with the 28 dB from ball to ball of the rate below.',
+  },
+  'ieee-200g-cr1': {
+    ...DRAFT,
+    name: '200GBASE-CR1, 400GBASE-CR2, 800GBASE-CR4, 1.6TBASE-CR8',
+    clause: 'P802.3dj (draft) Clause 179; key motions of March 2024',
+    limit: '40 dB',
+    publishedFrom: 'tx-die',
+    publishedTo: 'rx-die',
+    presumes: 'Die to die: both packages and the connectors between the planes included.',
+    confidence: 'read',
+    status: 'draft; objective',
+    caution: NO_CLAUSE_SEEN,
+  },
+})
