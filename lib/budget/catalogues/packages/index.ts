@@ -1,0 +1,3 @@
+export { type PackageEntry, packageEntry } from './entry'
+export { lineFromPackage } from './lineFromPackage'
+export { PUBLISHED_PACKAGES } from './published'
