@@ -1,7 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { discreteLoss, moveUniformLoss, skewLoss, twoTermAttenuation } from '../../lib/channel/lines'
-import { shuntCapacitanceLoss } from '../../lib/channel/pads/shuntCapacitance'
 
 describe('a loss moved in frequency', () => {
   it('holds within ±2 % of its frequency as it stands, for lines and discretes', () => {
@@ -66,29 +65,5 @@ describe('skew inside the pair', () => {
   it('is nothing without skew and unknown from half a period on', () => {
     expect(skewLoss(0, 10e9)).toBe(0)
     expect(skewLoss(50e-12, 10e9)).toBeNull()
-  })
-})
-
-describe('a pad', () => {
-  it.each([
-    [100e-15, 12.890625e9, 0.17451],
-    [250e-15, 10e9, 0.62286],
-  ])('%f F in 50 Ω per conductor at %f Hz (physics.md W10, recomputed there)', (capacitance, hz, expected) => {
-    expect(shuntCapacitanceLoss(capacitance, 100, hz)).toBeCloseTo(expected, 5)
-  })
-
-  it('is |2/(2 + jωC·R/2)| for any capacitance and reference (random, formula by complex numbers)', () => {
-    fc.assert(
-      fc.property(
-        fc.double({ min: 1e-18, max: 1e-9, noNaN: true }),
-        fc.double({ min: 10, max: 200, noNaN: true }),
-        fc.double({ min: 1e6, max: 3e11, noNaN: true }),
-        (capacitance, reference, hz) => {
-          const imaginary = 2 * Math.PI * hz * capacitance * (reference / 2)
-          const magnitude = 2 / Math.hypot(2, imaginary)
-          expect(shuntCapacitanceLoss(capacitance, reference, hz)).toBeCloseTo(-20 * Math.log10(magnitude), 9)
-        },
-      ),
-    )
   })
 })

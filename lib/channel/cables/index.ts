@@ -1,0 +1,2 @@
+export { bulkAttenuation, type CableTerms } from './bulk'
+export { twinaxFloor, wireDiameter } from './twinax'

@@ -1,0 +1,2 @@
+export { mountedCapacitor } from './mountedCapacitor'
+export { inductanceCorner, type SeriesCapacitor } from './seriesCapacitor'

@@ -1,0 +1,1 @@
+export { type PackageLine, packageAttenuation, packageTwoPort } from './packageLine'

@@ -1,0 +1,1 @@
+export { padCorner, shuntCapacitance } from './shuntCapacitance'

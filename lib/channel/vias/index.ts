@@ -1,0 +1,3 @@
+export { secondWave } from './barrel'
+export { stubResonance } from './stub'
+export { type Via, viaTwoPort } from './via'
