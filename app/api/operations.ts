@@ -8,6 +8,8 @@ import * as member from './v1/budgets/[id]/members/[person]/declaration'
 import * as members from './v1/budgets/[id]/members/declaration'
 import * as trail from './v1/budgets/[id]/trail/declaration'
 import * as budgets from './v1/budgets/declaration'
+import * as catalogueEntry from './v1/catalogues/[id]/declaration'
+import * as catalogues from './v1/catalogues/declaration'
 import * as evaluate from './v1/evaluate/declaration'
 import * as health from './v1/health/declaration'
 import * as openapi from './v1/openapi.json/declaration'
@@ -36,6 +38,8 @@ export const OPERATIONS: readonly Declaration[] = [
   evidenceFile,
   members,
   member,
+  catalogues,
+  catalogueEntry,
   health,
   openapi,
 ].flatMap((declarations): Declaration[] => Object.values(declarations))

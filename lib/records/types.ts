@@ -21,6 +21,7 @@ export type Records = {
   readonly members: MemberRecords
   readonly tokens: TokenRecords
   readonly evidence: EvidenceRecords
+  readonly catalogues: CatalogueRecords
   readonly settings: SettingRecords
   /** The account library's own storage (users, sessions, accounts, verifications), opaque to everybody else. */
   readonly accountStorage: unknown
@@ -101,6 +102,22 @@ export type EvidenceRecords = {
   describe(record: EvidenceRecord): Promise<EvidenceRecord>
   list(budget: string): Promise<EvidenceRecord[]>
   find(budget: string, sha256: string): Promise<EvidenceRecord | null>
+}
+
+/** An entry that somebody added to a catalogue of this server; `entry` is JSON, judged by whoever reads it. */
+export type CatalogueRecord = {
+  readonly id: string
+  readonly kind: string
+  readonly entry: string
+  readonly person: string
+  readonly time: number
+}
+export type CatalogueRecords = {
+  add(record: CatalogueRecord): Promise<void>
+  byId(id: string): Promise<CatalogueRecord | null>
+  /** Oldest first. */
+  all(): Promise<CatalogueRecord[]>
+  remove(id: string): Promise<boolean>
 }
 
 /** Single values that must survive a restart, such as the hash of the first owner's code. */

@@ -42,6 +42,7 @@ export async function startServer(
     access,
     budgets: sync.budgets,
     evidence: sync.evidence,
+    catalogues: sync.catalogues,
     ready: () => ready(store),
     submit: sync.submit,
   })

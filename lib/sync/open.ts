@@ -4,6 +4,7 @@ import type { Store } from '../records/types'
 import { Reader } from './budgets/reader'
 import { finishBudgets } from './budgets/recover'
 import { createBudgetService } from './budgets/service'
+import { createCatalogueService } from './catalogues'
 import { type Clock, type Log, systemTimers, type Timers } from './clock'
 import { Committer } from './committer'
 import { createEvidenceService } from './evidence'
@@ -27,7 +28,7 @@ export type SyncOptions = {
   readonly timers?: Timers
 }
 
-export type Sync = Pick<Services, 'budgets' | 'evidence' | 'submit'> & {
+export type Sync = Pick<Services, 'budgets' | 'evidence' | 'catalogues' | 'submit'> & {
   /** Takes the worksheet's sockets of this server; other upgrades are left to the server's other listeners. */
   attach(server: Server): void
   /** Takes no more, commits and answers what was accepted, lets everybody go, and makes snapshots. */
@@ -58,6 +59,7 @@ export async function openSync(options: SyncOptions): Promise<Sync> {
       rooms,
     ),
     evidence: createEvidenceService(store.evidence, records, clock.now),
+    catalogues: createCatalogueService(records, clock.now),
     submit: createSubmit(rooms),
     attach(server) {
       collabs.push(attachCollab(server, { rooms, sessions, journal, clock, log, publicUrl }))

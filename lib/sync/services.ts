@@ -1,5 +1,6 @@
 import type { Identity } from '../access/identity'
 import type { AccessService } from '../access/service'
+import type { OwnEntry } from '../budget/catalogues/ownEntry'
 import type { Evaluation } from '../budget/evaluation'
 import type { Budget, Verdict } from '../budget/schema'
 import type { Operation } from '../sheet/change'
@@ -18,6 +19,7 @@ export type Services = {
   readonly access: AccessService
   readonly budgets: BudgetService
   readonly evidence: EvidenceService
+  readonly catalogues: CatalogueService
   /** Null where both databases answer, else what is wrong, in words that may be shown to anybody. */
   ready(): Promise<string | null>
   /** The way in for everything but a worksheet's socket: same gate, journal and fan-out. */
@@ -76,5 +78,21 @@ export type StoredEvidence = {
   readonly mediaType: string
   readonly size: number
   readonly person: string
+  readonly time: number
+}
+
+/** What people added to the catalogues of this server: whoever is signed in reads it and may add to it. */
+export type CatalogueService = {
+  /** Oldest first. */
+  list(): Promise<CatalogueItem[]>
+  add(identity: Identity, own: OwnEntry): Promise<{ id: string }>
+  /** Only who added it, or the administrator. */
+  remove(identity: Identity, id: string): Promise<'done' | 'no-such-entry' | 'not-yours'>
+}
+
+export type CatalogueItem = OwnEntry & {
+  readonly id: string
+  readonly person: string
+  readonly personName: string
   readonly time: number
 }

@@ -1,6 +1,6 @@
 import { Prisma } from '../generated/client'
 
-type Kind = 'person' | 'budget' | 'token'
+type Kind = 'person' | 'budget' | 'token' | 'catalogue entry'
 
 /** What the call names is not in the records. */
 export class NotRecorded extends Error {

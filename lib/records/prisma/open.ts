@@ -3,6 +3,7 @@ import { PrismaClient } from '../generated/client'
 import type { Records } from '../types'
 import { recordsAdapter, requireSettings } from './adapter'
 import { budgetRecords } from './budgets'
+import { catalogueRecords } from './catalogues'
 import { evidenceRecords } from './evidence'
 import { memberRecords } from './members'
 import { peopleRecords } from './people'
@@ -30,6 +31,7 @@ export async function openRecords(file: string): Promise<{ records: Records; clo
     members: memberRecords(client),
     tokens: tokenRecords(client),
     evidence: evidenceRecords(client),
+    catalogues: catalogueRecords(client),
     settings: settingRecords(client),
     accountStorage: prismaAdapter(client, { provider: 'sqlite' }),
   }

@@ -16,7 +16,7 @@ export async function openWorksheet() {
     clock: world.now,
     log: (message, error) => world.logged.push(`${message}: ${error}`),
   })
-  const { budgets, evidence, submit } = sync
+  const { budgets, evidence, catalogues, submit } = sync
   const services: Services = {
     publicUrl: PUBLIC_URL,
     demo: false,
@@ -24,6 +24,7 @@ export async function openWorksheet() {
     access: world.access,
     budgets,
     evidence,
+    catalogues,
     submit,
     ready: async () => null,
   }

@@ -63,6 +63,7 @@ export function memoryRecords(people: Readonly<Record<string, Identity>>): Recor
       list: async (id) => evidence.filter(({ budget }) => budget === id),
       find: async (id, sha256) => evidence.find((one) => one.budget === id && one.sha256 === sha256) ?? null,
     },
+    catalogues: { add: missing, byId: missing, all: missing, remove: missing },
     settings: { get: missing, set: missing, remove: missing },
     accountStorage: null,
     erase: (person) => persons.delete(person),
