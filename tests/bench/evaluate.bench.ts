@@ -66,7 +66,7 @@ function shortest(budget: Budget): { loss: number; rss: number; margin: number }
 }
 
 /** Milliseconds of one call: the median of several rounds of many. */
-function milliseconds(rounds: number, calls: number, work: (n: number) => unknown): number {
+export function milliseconds(rounds: number, calls: number, work: (n: number) => unknown): number {
   const times: number[] = []
   for (let round = 0; round < rounds; round++) {
     const start = performance.now()

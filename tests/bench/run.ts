@@ -1,8 +1,9 @@
+import { benchCascade } from './cascade.bench'
 import { benchEvaluate } from './evaluate.bench'
 import { benchWritePath } from './writePath.bench'
 
 /** One run, one table: each figure beside its baseline, measured in this same process. Nothing is asserted. */
-const rows = [...(await benchEvaluate()), ...(await benchWritePath())]
+const rows = [...(await benchEvaluate()), ...(await benchCascade()), ...(await benchWritePath())]
 const width = Math.max(...rows.map((row) => row.what.length))
 for (const { what, ours, baseline, unit } of rows) {
   const ratio = (ours / baseline).toFixed(2)
