@@ -1,12 +1,11 @@
+import { insertionLoss } from '../networks/losses'
 import { type Network, TWO_PORT } from '../networks/network'
-import { unwrap } from './unwrap'
-
-const DB = 20 / Math.LN10
+import { tooCoarse, unwrappedPhase } from '../networks/phase'
 
 export type ThroughFacts = {
   /** Hz and dB at the lowest frequency above zero. A plain conductor loses next to nothing there. */
   readonly lowest: { readonly hz: number; readonly lossDb: number }
-  /** s, slope of the phase of S21 over the file by least squares; null where a step of phase comes near half a turn. */
+  /** s, slope of the phase of S21 over the file by least squares; null where points lie a quarter turn apart. */
   readonly delay: number | null
   /** dB by which the upper third of the file loses less than the lower third on average; 0 where it loses more. */
   readonly risesDb: number
@@ -20,22 +19,15 @@ export type ThroughFacts = {
  */
 export function throughFacts({ hz, s }: Network): ThroughFacts | null {
   const first = hz[0] === 0 ? 1 : 0
-  const count = hz.length - first
-  if (count < 3) return null
-  const loss = new Float64Array(count)
-  const phase = new Float64Array(count)
-  for (let i = 0; i < count; i++) {
-    const at = TWO_PORT * (i + first) + 4
-    const re = s[at] as number
-    const im = s[at + 1] as number
-    if (re === 0 && im === 0) return null
-    loss[i] = -DB * Math.log(Math.hypot(re, im))
-    phase[i] = Math.atan2(im, re)
-  }
+  const above = hz.subarray(first)
+  const samples = s.subarray(TWO_PORT * first)
+  const count = above.length
+  const loss = insertionLoss(samples)
+  if (count < 3 || !loss.every(Number.isFinite)) return null
   const third = Math.floor(count / 3)
   return {
-    lowest: { hz: hz[first] as number, lossDb: loss[0] as number },
-    delay: unwrap(phase) ? -slope(hz.subarray(first), phase) / (2 * Math.PI) : null,
+    lowest: { hz: above[0] as number, lossDb: loss[0] as number },
+    delay: tooCoarse(above, samples) ? null : -slope(above, unwrappedPhase(samples)) / (2 * Math.PI),
     risesDb: Math.max(0, mean(loss.subarray(0, third)) - mean(loss.subarray(count - third))),
   }
 }
