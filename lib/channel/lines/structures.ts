@@ -5,8 +5,7 @@ import { KIRSCHNING_JANSEN_LIMIT } from './microstrip/dispersion'
 import { coupledMicrostripSection, microstripSection } from './microstrip/section'
 import { coupledStriplineSection, striplineSection } from './stripline/section'
 
-export const STRUCTURES = ['microstrip', 'stripline', 'coupled-microstrip', 'coupled-stripline'] as const
-export type Structure = (typeof STRUCTURES)[number]
+export type Structure = 'microstrip' | 'stripline' | 'coupled-microstrip' | 'coupled-stripline'
 
 /** The cross-section of a structure; the dielectric's relative permittivity decides the share of the field in it. */
 export function crossSection(structure: Structure, dimensions: Dimensions, dielectric: number): CrossSection {

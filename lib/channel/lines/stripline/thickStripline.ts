@@ -26,7 +26,7 @@ function widening(w: number, t: number): number {
 /**
  * A strip off the centre is two halves in parallel: below it half of a centred line whose planes are 2·below + t apart, above
  * it half of one with 2·above + t. Exact where it is centred, and where it is wide. Against boundary elements the impedance
- * is up to 1 % high where one side is twice the other, 2.5 % at three times, 4 % at four times.
+ * is up to 1 % high where one side is twice the other, 3 % at three times, 4 % at four times.
  * @param centred of a width and a gap, by plane to plane
  */
 export function offCentre(centred: (spacing: number) => number, { thickness, below, above }: Dimensions): number {
