@@ -107,18 +107,15 @@ describe('the four-port of the Touchstone specification at 5 GHz', () => {
       [0.15197, 63.041],
       [0.9442, -73.702],
     ],
-  ] as const)(
-    '%s: Sdd11, Sdd21, Scc21 (recomputed from the four terms of each)',
-    (text, pairs, dd11, dd21, cc21) => {
-      const sdd = differential(given, text).s
-      for (const [found, [size, degrees]] of [
-        [polar(sdd, 0), dd11],
-        [polar(sdd, 2), dd21],
-        [polar(mixedMode(given, pairs).s, 4 * 3 + 2), cc21],
-      ] as const) {
-        expect(found[0]).toBeCloseTo(size, 5)
-        expect(found[1]).toBeCloseTo(degrees, 3)
-      }
-    },
-  )
+  ] as const)('%s: Sdd11, Sdd21, Scc21 (recomputed from the four terms of each)', (text, pairs, dd11, dd21, cc21) => {
+    const sdd = differential(given, text).s
+    for (const [found, [size, degrees]] of [
+      [polar(sdd, 0), dd11],
+      [polar(sdd, 2), dd21],
+      [polar(mixedMode(given, pairs).s, 4 * 3 + 2), cc21],
+    ] as const) {
+      expect(found[0]).toBeCloseTo(size, 5)
+      expect(found[1]).toBeCloseTo(degrees, 3)
+    }
+  })
 })
