@@ -2,7 +2,7 @@
 export type Meaning = 'limit' | '1-sigma' | '3-sigma' | '95-percent' | 'anywhere'
 
 /** Coverage factor of 95 % for a normal distribution (JCGM 100:2008, table G.1). */
-const NORMAL_95 = 1.96
+export const NORMAL_95 = 1.96
 
 /**
  * Standard deviation of a tolerance t: t for 1σ, t/3 for 3σ and for a limit, t/1.96 for 95 %, t/√3 for anywhere within

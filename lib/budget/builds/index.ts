@@ -1,0 +1,6 @@
+export type { BuildLine, Variation } from './buildLine'
+export { type Builds, type BuildsInput, drawBuilds } from './drawBuilds'
+export { parameterSpread } from './parameterSpread'
+export { type Response, responseOf } from './response'
+export type { Varied } from './varied'
+export { variedOf } from './varies'
