@@ -27,6 +27,8 @@ export type FittedLoss = {
 }
 
 const GHZ = 1e9
+/** Np of one decibel. */
+const NEPER = Math.LN10 / 20
 /** As many points for each term, so that the deviation says something. */
 const POINTS_A_TERM = 2
 
@@ -71,7 +73,7 @@ function solve(band: Float64Array, loss: Float64Array, terms: number, weighted: 
   const skip = 4 - terms
   for (let i = 0; i < count; i++) {
     const f = (band[i] as number) / GHZ
-    const weight = weighted ? 10 ** (-(loss[i] as number) / 20) : 1
+    const weight = weighted ? Math.exp(-NEPER * (loss[i] as number)) : 1
     if (skip === 0) columns[i] = weight
     columns[(1 - skip) * count + i] = weight * Math.sqrt(f)
     columns[(2 - skip) * count + i] = weight * f
