@@ -84,7 +84,7 @@ export type StoredEvidence = {
 /** What people added to the catalogues of this server: whoever is signed in reads it and may add to it. */
 export type CatalogueService = {
   /** Oldest first. */
-  list(): Promise<CatalogueItem[]>
+  list(identity: Identity): Promise<CatalogueItem[]>
   add(identity: Identity, own: OwnEntry): Promise<{ id: string }>
   /** Only who added it, or the administrator. */
   remove(identity: Identity, id: string): Promise<'done' | 'no-such-entry' | 'not-yours'>
@@ -95,4 +95,6 @@ export type CatalogueItem = OwnEntry & {
   readonly person: string
   readonly personName: string
   readonly time: number
+  /** Whether who asks may remove it. */
+  readonly mayRemove: boolean
 }

@@ -17,6 +17,7 @@ const added = {
   person: z.string().meta({ description: 'Id of the person who added it.' }),
   personName: z.string(),
   time,
+  mayRemove: z.boolean().meta({ description: 'Whether who asks may remove it.' }),
 }
 
 export const catalogueItem = component(

@@ -3,8 +3,8 @@ import { addCatalogueEntry, listCatalogues } from './declaration'
 
 export const dynamic = 'force-dynamic'
 
-export const GET = read(listCatalogues, async ({ services }) => ({
-  json: { entries: await services.catalogues.list() },
+export const GET = read(listCatalogues, async ({ services, identity }) => ({
+  json: { entries: await services.catalogues.list(identity) },
 }))
 
 export const POST = change(addCatalogueEntry, async ({ services, identity, body }) => {

@@ -9,6 +9,7 @@ import { usb } from './usb'
 
 export { type AllowanceEntry, allowanceEntry } from './entry'
 export { allowanceFromCatalogue } from './fromCatalogue'
+export { allowanceToCatalogue } from './toCatalogue'
 export { OWN_COPY_WINS } from './words'
 
 /** Published loss allowances, by body and rate. Sources were read or remembered as each entry's confidence says. */
