@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { interpolate, parsePoints } from '../../lib/channel/tables'
+import { interpolate, interpolateOver, parsePoints } from '../../lib/channel/tables'
 
 const points = (text: string) => {
   const parsed = parsePoints(text, 'loss')
@@ -99,6 +99,27 @@ describe('between points', () => {
         expect(found?.value).toBeGreaterThanOrEqual(Math.min(below.value, above.value) - 1e-9)
         expect(found?.value).toBeLessThanOrEqual(Math.max(below.value, above.value) + 1e-9)
       }),
+    )
+  })
+
+  it('over many frequencies gives at each what it gives alone, and the ends at the ends (random, seed 11)', () => {
+    const anyPoints = fc.uniqueArray(
+      fc.record({ hz: fc.integer({ min: 1, max: 1000 }), value: fc.double({ min: 0, max: 50, noNaN: true }) }),
+      { minLength: 1, maxLength: 20, selector: ({ hz }) => hz },
+    )
+    fc.assert(
+      fc.property(anyPoints, fc.array(fc.double({ min: 0, max: 1, noNaN: true })), (unsorted, shares) => {
+        const sorted = unsorted.sort((a, b) => a.hz - b.hz)
+        const [from, to] = [sorted[0]?.hz ?? 0, sorted.at(-1)?.hz ?? 0]
+        const hz = Float64Array.from([0, 1, ...shares].sort(), (share) =>
+          Math.min(to, from + share * (to - from)),
+        ).sort()
+        const alone = Array.from(hz, (f) => interpolate(sorted, f)?.value)
+        expect(Array.from(interpolateOver(sorted, hz))).toEqual(
+          alone.map((value) => expect.closeTo(value ?? Number.NaN, 12)),
+        )
+      }),
+      { seed: 11 },
     )
   })
 })

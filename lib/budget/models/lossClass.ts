@@ -2,6 +2,7 @@ import { parsePoints } from '../../channel/tables'
 import type { Findings } from '../findings'
 import { FREQUENCY, LENGTH, LOSS_PER_LENGTH, NUMBER } from '../quantities'
 import { atFrequency } from './atFrequency'
+import { ownLine } from './knownPiece'
 import type { Model, ModelInput } from './model'
 import { fromPoints } from './table'
 
@@ -20,16 +21,16 @@ export const lossClass: Model = (input) => {
   }
   const scale = classFields.may('scale', NUMBER)
   if (length === null || scale === 'unreadable') return null
-  return attenuation(input, classFields, length * (scale ?? 1))
+  return attenuation(input, classFields, length, scale ?? 1)
 }
 
-/** dB over so many metres of the class. */
-function attenuation(input: ModelInput, fields: Findings<'lossClasses'>, length: number) {
+/** @param scale what a coupon of the class measured, over what the class says */
+function attenuation(input: ModelInput, fields: Findings<'lossClasses'>, length: number, scale: number) {
   const { points: text } = fields.record
   if (text === null || text.trim() === '') {
     const perLength = fields.need('lossPerLength', LOSS_PER_LENGTH)
     const at = fields.need('at', FREQUENCY)
-    return perLength === null || at === null ? null : atFrequency(input, fields, perLength * length, at)
+    return perLength === null || at === null ? null : atFrequency(input, fields, perLength * (length * scale), at)
   }
   const parsed = parsePoints(text, 'lossPerLength')
   if ('reason' in parsed) {
@@ -41,5 +42,7 @@ function attenuation(input: ModelInput, fields: Findings<'lossClasses'>, length:
   if (stated && (perLength === null || at === null)) return null
   const further = perLength !== null && at !== null ? [{ hz: at, value: perLength }] : []
   const points = [...parsed.points.filter((point) => point.hz !== at), ...further].sort((a, b) => a.hz - b.hz)
-  return fromPoints(input, fields, points, length)
+  const own = ownLine(input.fields)
+  if (own === null) return null
+  return fromPoints(input, fields, points, { length, ...own }, (values) => (values.length ?? Number.NaN) * scale)
 }

@@ -1,7 +1,11 @@
-import { interpolate, type Point, parsePoints } from '../../channel/tables'
+import { interpolate, interpolateOver, type Point, parsePoints } from '../../channel/tables'
 import { formatScaled } from '../../channel/units'
 import type { Owner } from '../findings'
-import type { Model, ModelInput, ModelLoss } from './model'
+import { LENGTH } from '../quantities'
+import { isUniform } from '../uniform'
+import { knownPiece, lineOf, ownLine } from './knownPiece'
+import type { Model, ModelInput } from './model'
+import type { Computed, Values } from './piece'
 
 /** Points of loss over frequency, interpolated and never extrapolated. */
 export const table: Model = (input) => {
@@ -18,7 +22,16 @@ export const table: Model = (input) => {
   if ('reason' in parsed) {
     return fields.say('unreadable-value', 'points', `${fields.name}: the points cannot be read.`, parsed.reason)
   }
-  return fromPoints(input, fields, parsed.points, 1)
+  const itself = isUniform(line) ? ownLengthOfLine(input) : {}
+  return itself && fromPoints(input, fields, parsed.points, itself, () => 1)
+}
+
+/** A table is of the whole line, so its length serves the delay only. */
+function ownLengthOfLine({ fields }: ModelInput): Values | null {
+  const length = fields.may('length', LENGTH)
+  const own = ownLine(fields)
+  if (length === 'unreadable' || own === null) return null
+  return length === null ? {} : { length, ...own }
 }
 
 /** Far points: where a power law through them differs from the straight line by more than this. */
@@ -27,19 +40,23 @@ const COARSE_SHARE = 0.02
 
 /**
  * @param owner the record that holds the points
- * @param factor dB per unit of the points: 1 for a loss, the length for a loss per length
+ * @param values of the line, for build
+ * @param factorOf dB per unit of the points, by the values: 1 for a loss, the length for a loss per length
  */
 export function fromPoints(
   input: ModelInput,
   owner: Owner,
   points: readonly Point[],
-  factor: number,
-): ModelLoss | null {
+  values: Values,
+  factorOf: (values: Values) => number,
+): Computed | null {
   const asked = formatScaled(input.hz, 'frequency')
   const found = interpolate(points, input.hz)
-  if (found === null) {
-    const lowest = formatScaled(points[0]?.hz ?? 0, 'frequency')
-    const highest = formatScaled(points.at(-1)?.hz ?? 0, 'frequency')
+  const first = points[0]
+  const last = points.at(-1)
+  if (found === null || !first || !last) {
+    const lowest = formatScaled(first?.hz ?? 0, 'frequency')
+    const highest = formatScaled(last?.hz ?? 0, 'frequency')
     return owner.say(
       'outside-table',
       'points',
@@ -47,9 +64,9 @@ export function fromPoints(
       `Add a point at ${asked} or beyond.`,
     )
   }
-  const db = found.value * factor
+  const factor = factorOf(values)
   const differs = found.differs * factor
-  if (differs > COARSE_DB && differs > COARSE_SHARE * db) {
+  if (differs > COARSE_DB && differs > COARSE_SHARE * found.value * factor) {
     owner.say(
       'coarse-table',
       'points',
@@ -57,5 +74,10 @@ export function fromPoints(
       `Add a point near ${asked}.`,
     )
   }
-  return { db, by: 'table', spreadDb: 0 }
+  return { values, build: (changed) => pieceOf(points, first.hz, last.hz, changed, factorOf(changed)) }
+}
+
+function pieceOf(points: readonly Point[], from: number, to: number, values: Values, factor: number) {
+  const attenuation = (hz: Float64Array) => interpolateOver(points, hz).map((value) => value * factor)
+  return knownPiece({ from, to, attenuation, line: lineOf(values) })
 }

@@ -1,2 +1,2 @@
-export { type Interpolated, interpolate } from './interpolate'
+export { type Interpolated, interpolate, interpolateOver } from './interpolate'
 export { type Point, type Points, parsePoints } from './parsePoints'

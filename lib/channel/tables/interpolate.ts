@@ -27,6 +27,25 @@ export function interpolate(points: readonly Point[], hz: number): Interpolated 
   return { value, differs: Math.abs(powerLaw(low, high, hz) - value) }
 }
 
+/**
+ * The same straight lines at many frequencies; at the ends the first and the last value.
+ * @param points by rising frequency, at least one
+ * @param hz Hz, rising, between the first and the last point
+ */
+export function interpolateOver(points: readonly Point[], hz: Float64Array): Float64Array {
+  const values = new Float64Array(hz.length).fill(Number.NaN)
+  let above = 0
+  for (let i = 0; i < hz.length; i++) {
+    const f = hz[i] as number
+    while (above < points.length - 1 && (points[above] as Point).hz < f) above++
+    const high = points[above] as Point
+    const low = points[above - 1]
+    const flat = low === undefined || f >= high.hz
+    values[i] = flat ? high.value : low.value + ((high.value - low.value) * (f - low.hz)) / (high.hz - low.hz)
+  }
+  return values
+}
+
 /** value ∝ f^n through both points: exact for pure √f and pure f, so it shows what a straight line between far points may miss. */
 function powerLaw(low: Point, high: Point, hz: number): number {
   if (low.value <= 0 || high.value <= 0)
