@@ -9,7 +9,7 @@ const BELOW = [
 ]
 
 /**
- * Cumulative normal distribution of mean 0 and standard deviation 1, to about 1e-15 (Hart et al., Computer Approximations,
+ * Cumulative normal distribution of mean 0 and standard deviation 1, within 2e-15 (Hart et al., Computer Approximations,
  * 1968, algorithm 5666, and a continued fraction beyond 7.07, as put together by West 2005; coefficients from memory,
  * checked against a general-purpose library).
  */
