@@ -1,9 +1,15 @@
 import { benchCascade } from './cascade.bench'
 import { benchEvaluate } from './evaluate.bench'
+import { benchTouchstone } from './touchstone.bench'
 import { benchWritePath } from './writePath.bench'
 
 /** One run, one table: each figure beside its baseline, measured in this same process. Nothing is asserted. */
-const rows = [...(await benchEvaluate()), ...(await benchCascade()), ...(await benchWritePath())]
+const rows = [
+  ...(await benchEvaluate()),
+  ...(await benchCascade()),
+  ...(await benchTouchstone()),
+  ...(await benchWritePath()),
+]
 const width = Math.max(...rows.map((row) => row.what.length))
 for (const { what, ours, baseline, unit } of rows) {
   const ratio = (ours / baseline).toFixed(2)

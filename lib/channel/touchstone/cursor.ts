@@ -1,3 +1,4 @@
+import { latin1 } from './latin1'
 import { Unreadable } from './unreadable'
 
 export const BANG = 33
@@ -52,7 +53,7 @@ export class Cursor {
     if (to - from > LONGEST_WORD)
       throw new Unreadable(this.line, `'${this.shown()}' is longer than anything that may stand here.`)
     this.at = to
-    return String.fromCharCode(...this.bytes.subarray(from, to))
+    return latin1(this.bytes, from, to)
   }
 
   /** The rest of the line, comment and all, left out. @returns where it began and ended */
@@ -65,7 +66,7 @@ export class Cursor {
   /** The word here as a message may show it. */
   shown(): string {
     const to = Math.min(this.endOfWord(), this.at + 24)
-    const text = String.fromCharCode(...this.bytes.subarray(this.at, to)).replace(/[^\x21-\x7e\xa1-\xff]/g, '?')
+    const text = latin1(this.bytes, this.at, to).replace(/[^\x21-\x7e\xa1-\xff]/g, '?')
     return this.endOfWord() > to ? `${text}…` : text
   }
 

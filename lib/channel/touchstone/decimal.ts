@@ -1,3 +1,4 @@
+import { latin1 } from './latin1'
 import { LARGEST_POWER, POWER } from './powers'
 import { scaled } from './scaled'
 
@@ -93,11 +94,7 @@ export class Decimal {
           : whole * (POWER[LARGEST_POWER + exponent] as number)
     } else if (chunks === 0) value = scaled(chunk, 0, 0, exponent)
     else if (all <= MOST_DIGITS) value = scaled(chunk0, low, all - CHUNK, exponent)
-    if (Number.isNaN(value)) value = Number(`${ascii(bytes, first, mantissaEnd)}e${power + shift}`)
+    if (Number.isNaN(value)) value = Number(`${latin1(bytes, first, mantissaEnd)}e${power + shift}`)
     return negative ? -value : value
   }
-}
-
-function ascii(bytes: Uint8Array, from: number, to: number): string {
-  return String.fromCharCode(...bytes.subarray(from, to))
 }

@@ -1,6 +1,7 @@
 import { BRACKET, CLOSING_BRACKET, type Cursor } from './cursor'
 import { MOST_PORTS } from './fileName'
 import type { Header } from './header'
+import { latin1 } from './latin1'
 import { Unreadable } from './unreadable'
 import type { Warnings } from './warnings'
 
@@ -67,7 +68,7 @@ function keywordName(cursor: Cursor): string {
   const from = cursor.at + 1
   let to = from
   while (to < bytes.length && to - from <= LONGEST_KEYWORD && bytes[to] !== CLOSING_BRACKET) to++
-  const name = String.fromCharCode(...bytes.subarray(from, to))
+  const name = latin1(bytes, from, to)
   if (bytes[to] !== CLOSING_BRACKET || /[\r\n]/.test(name))
     throw new Unreadable(
       cursor.line,
@@ -116,7 +117,7 @@ function skipInformation(cursor: Cursor, begun: number): void {
   for (let byte = cursor.next(); byte !== -1; byte = cursor.next()) {
     const { from, to } = cursor.skipLine()
     if (byte !== BRACKET) continue
-    const beginning = String.fromCharCode(...cursor.bytes.subarray(from, Math.min(to, from + LONGEST_KEYWORD)))
+    const beginning = latin1(cursor.bytes, from, Math.min(to, from + LONGEST_KEYWORD))
     if (/^\[\s*end\s+information\s*\]/i.test(beginning)) return
   }
   throw new Unreadable(

@@ -1,5 +1,6 @@
 import type { Cursor } from './cursor'
 import type { Format, Parameter, Unit } from './file'
+import { MOST_PORTS } from './fileName'
 import { Unreadable } from './unreadable'
 
 /** What the line that begins with # says. */
@@ -69,6 +70,11 @@ function readResistances(cursor: Cursor): number[] {
       break
     }
     resistances.push(resistance(cursor.line, Number(word)))
+    if (resistances.length > MOST_PORTS)
+      throw new Unreadable(
+        cursor.line,
+        `R has more than ${MOST_PORTS} numbers; write one for all ports or one for each.`,
+      )
   }
   if (resistances.length === 0)
     throw new Unreadable(cursor.line, 'R has no number; write the reference in ohms behind it.')

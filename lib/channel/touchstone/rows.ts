@@ -87,10 +87,11 @@ export class Rows {
     let same = true
     for (let k = 0; k < numbers; k++) same &&= this.pairs.at(row + k) === this.pairs.at(row - numbers + k)
     this.pairs.length = row
-    const shown = formatScaled(this.hz.at(this.hz.length - 1), 'frequency')
+    const hz = this.hz.at(this.hz.length - 1)
     this.warnings.add(
       this.begun,
-      `${shown} stands here again, with ${same ? 'the same' : 'other'} values; the first of the rows counts.`,
+      () =>
+        `${formatScaled(hz, 'frequency')} stands here again, with ${same ? 'the same' : 'other'} values; the first of the rows counts.`,
     )
   }
 

@@ -1,6 +1,7 @@
 import { Comments } from './comments'
 import type { Cursor } from './cursor'
 import type { TouchstoneFile } from './file'
+import { MOST_PORTS } from './fileName'
 import { finished } from './finished'
 import { Header, type Layout, layoutOf } from './header'
 import { readKeyword, type Section } from './keywords'
@@ -81,10 +82,13 @@ export class Scan {
       const hz = data.rows.takeLine(this.numbers, cursor)
       if (hz !== null) this.beginNoiseOfVersion1(data.layout, hz)
     } else if (this.noise) this.noise.take(this.numbers)
-    else if (this.section === 'reference' && header.reference)
+    else if (this.section === 'reference' && header.reference) {
       header.reference.push(resistance(cursor.line, this.numbers.take(0)))
-    else if (this.section === 'modes' && header.modes) header.modes.push(cursor.word())
-    else this.beginVersion1()
+      this.checkRoom(header.reference, '[Reference]')
+    } else if (this.section === 'modes' && header.modes) {
+      header.modes.push(cursor.word())
+      this.checkRoom(header.modes, '[Mixed-Mode Order]')
+    } else this.beginVersion1()
   }
 
   /** @throws Unreadable where something is missing */
@@ -104,6 +108,11 @@ export class Scan {
     if (header.keywordVersion !== null && this.section !== 'end')
       warnings.add(cursor.line, '[End] is missing at the end of the file.')
     return finished(data.layout, data.rows, noise, this.comments.text(), warnings)
+  }
+
+  private checkRoom(list: readonly unknown[], keyword: string): void {
+    if (list.length > MOST_PORTS)
+      throw new Unreadable(this.cursor.line, `${keyword} has more than ${MOST_PORTS} entries; write one for each port.`)
   }
 
   private begin(line: number): void {

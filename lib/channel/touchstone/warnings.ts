@@ -7,9 +7,10 @@ export class Warnings {
   readonly list: TouchstoneWarning[] = []
   private left = 0
 
-  add(line: number | null, message: string): void {
-    if (this.list.length < MOST) this.list.push({ line, message })
-    else this.left++
+  /** @param message or what makes it, where many may be left out */
+  add(line: number | null, message: string | (() => string)): void {
+    if (this.list.length === MOST) this.left++
+    else this.list.push({ line, message: typeof message === 'string' ? message : message() })
   }
 
   all(): readonly TouchstoneWarning[] {

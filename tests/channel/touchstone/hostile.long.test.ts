@@ -61,7 +61,7 @@ describe('hostile files end in bounded time and memory', () => {
     expect(points).toBe(303_030)
   })
 
-  it('10 million numbers on one line, all the same: refused where the frequency falls or warned of, never slowly', () => {
+  it('10 million numbers on one line, all the same: a million rows of one frequency, the last of them cut', () => {
     const { points, file } = outcome(repeated(HEAD, '1 ', 20 * MEGABYTE), 'a.s2p')
     expect('network' in file ? points : file.message).toMatch(/^The data end inside the row/)
   })
@@ -73,16 +73,16 @@ describe('hostile files end in bounded time and memory', () => {
   })
 
   it('10 million comment lines, then a row: read', () => {
-    const comments = repeated(HEAD, '! abcdef\n', 9 * 10 * MEGABYTE)
+    const comments = repeated(`${HEAD}!`, '! abcdef\n', 9 * 10 * MEGABYTE)
     const { file, taken } = outcome(Buffer.concat([comments, Buffer.from('\n1 0 0\n')]), 'a.s1p')
-    expect('comments' in file && file.comments.length).toBeLessThanOrEqual(4096)
+    expect('comments' in file ? file.comments.length : 0).toBeGreaterThan(3000)
     expect('network' in file && [...file.network.hz]).toEqual([1])
     expect(taken).toBeLessThan(20 * MEGABYTE)
   })
 
   it('10 million option lines: read, the warnings bounded', () => {
     const { file } = outcome(
-      Buffer.concat([repeated('1 1 0\n#Hz\n', '#\n', 20 * MEGABYTE), Buffer.from('\n')]),
+      Buffer.concat([repeated('#Hz \n1 1 0\n', '#\n', 20 * MEGABYTE), Buffer.from('\n')]),
       'a.s1p',
     )
     expect('warnings' in file && file.warnings.length).toBe(51)

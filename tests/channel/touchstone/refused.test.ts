@@ -65,6 +65,24 @@ describe('what cannot be understood is refused by its line, with what to do', ()
       'R has 2 numbers for 1 port; write one for all or one for each.',
     ],
     [
+      'R of 17 ports',
+      `# R${' 50'.repeat(17)}\n1 0 0\n`,
+      1,
+      'R has more than 16 numbers; write one for all ports or one for each.',
+    ],
+    [
+      'references of 17 ports',
+      v2(`${one}[Reference]${' 50'.repeat(17)}\n`),
+      4,
+      '[Reference] has more than 16 entries; write one for each port.',
+    ],
+    [
+      'modes of 17 ports',
+      v2(`${one}[Mixed-Mode Order]${' S1'.repeat(17)}\n`),
+      4,
+      '[Mixed-Mode Order] has more than 16 entries; write one for each port.',
+    ],
+    [
       'an unknown word among the options',
       '# GHz Q RI\n1 0 0\n',
       1,
