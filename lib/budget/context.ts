@@ -16,8 +16,15 @@ export type Context = {
   readonly rows: Evaluation['rows']
   readonly lanes: Lanes
   readonly losses: Losses
-  /** °C. */
-  readonly referenceTemperature: number | null
+  readonly asked: Asked
+}
+
+/** What is wanted beside the losses at the allowances' frequencies. */
+export type Asked = {
+  /** The cascade over frequency of every allowance; without it only of those whose curve or floor needs it. */
+  readonly sweep: boolean
+  /** Random builds to draw; 0: none. */
+  readonly builds: number
 }
 
 /** Lines and the planes between them, by fractional index, ties by id. */

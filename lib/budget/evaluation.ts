@@ -1,5 +1,7 @@
 import type { Network } from '../channel/networks/network'
+import type { Builds } from './builds'
 import type { FlagDraft, Severity } from './flags'
+import type { Beside } from './models/piece'
 import type { Basis, Grade, Owner, Statistic, Verdict } from './schema'
 
 /** What evaluate() returns. Losses are positive decibels; null means unknown, never zero. */
@@ -47,7 +49,9 @@ export type LossAt = {
   readonly lowDb: number | null
   readonly highDb: number | null
   /** How the number got to this frequency. */
-  readonly by: 'stated' | 'moved' | 'table' | 'computed' | null
+  readonly by: 'stated' | 'moved' | 'table' | 'computed' | 'measured' | null
+  /** Other ways to look at it, where the line's model knows its two-port. */
+  readonly beside: readonly Beside[]
 }
 
 export type AllowanceEvaluation = {
@@ -63,6 +67,11 @@ export type AllowanceEvaluation = {
     /** The lane that the figures are of: the worst, unless the allowance names one; null where all lanes are alike. */
     readonly lane: number | null
     readonly lanes: number
+    /** The lane with the least loss; null where all lanes are alike. */
+    readonly shortestLane: number | null
+    /** dB that the corner moved the sum by, and dB of lines that it could not move; null in the reference corner. */
+    readonly movedDb: number | null
+    readonly unmovedDb: number | null
   }
   readonly verdict: Verdict
   /** The verdict in words, as every screen and document shows it. */
@@ -83,10 +92,59 @@ export type AllowanceEvaluation = {
   readonly worstDb: number | null
   /** Three standard deviations of the sum, grouped. */
   readonly rssDb: number | null
+  /** The cascade of the two-ports beside the sum; null where it was not asked for or a plane is missing. */
+  readonly channel: ChannelEvaluation | null
+  /** Random builds; null where they were not asked for or a line has no number. */
+  readonly builds: Builds | null
   readonly byBasis: Readonly<Record<Basis | 'unsaid', number>>
   /** Lines between the planes in channel order, with what each counts here. */
   readonly lines: readonly CountedLine[]
   readonly shares: readonly ShareUse[]
+}
+
+/** The two-ports between the planes joined, in the judged lane and corner. Null is unknown, never passed. */
+export type ChannelEvaluation = {
+  readonly fromHz: number
+  readonly toHz: number
+  /** dB of the sum whose lines are in the cascade; of those, with reflection data. */
+  readonly coveredDb: number
+  readonly reflectingDb: number
+  /** Lines without data over the band: not in the cascade; lines that enter it as matched attenuation. */
+  readonly withoutBand: readonly string[]
+  readonly withoutReflection: readonly string[]
+  /** At the allowance's frequency: insertion loss of the cascade, and its fitted loss. The sum of the same lines is coveredDb. */
+  readonly lossDb: number | null
+  readonly fittedDb: number | null
+  /** a0, a1, a2, a4 of a0 + a1·√f + a2·f + a4·f², f in GHz. */
+  readonly fit: readonly number[] | null
+  /** Insertion loss less its fit; null where a line between the planes has no reflection data. */
+  readonly deviation: { readonly rmsDb: number; readonly maxDb: number; readonly rippleDb: number } | null
+  /** The lesser of both ends. */
+  readonly returnLoss: {
+    readonly atNyquistDb: number | null
+    readonly worstDb: number
+    readonly worstAtHz: number
+  } | null
+  readonly curve: CurveEvaluation | null
+  readonly trace: {
+    readonly hz: readonly number[]
+    /** Null where nothing passes, or nothing comes back. */
+    readonly lossDb: readonly (number | null)[]
+    readonly returnLossDb: readonly (number | null)[] | null
+    readonly limitDb: readonly (number | null)[] | null
+  }
+}
+
+/** A limit curve against the cascade. */
+export type CurveEvaluation = {
+  /** False: not every line has data over the curve's range, so that what is not missed is unknown. */
+  readonly whole: boolean
+  readonly missed: {
+    readonly fromHz: number
+    readonly toHz: number
+    readonly worstDb: number
+    readonly worstAtHz: number
+  } | null
 }
 
 export type CountedLine = {

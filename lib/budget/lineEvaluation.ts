@@ -51,7 +51,8 @@ function height({ loss }: InLane): number {
 }
 
 function lossAt(atHz: number | null, loss: LineLoss | null): LossAt {
-  if (loss === null || loss.nominal === null) return { atHz, nominalDb: null, lowDb: null, highDb: null, by: null }
+  if (loss === null || loss.nominal === null)
+    return { atHz, nominalDb: null, lowDb: null, highDb: null, by: null, beside: [] }
   const { lowExtreme, highExtreme } = loss.spread
   return {
     atHz,
@@ -59,5 +60,6 @@ function lossAt(atHz: number | null, loss: LineLoss | null): LossAt {
     lowDb: loss.nominal - lowExtreme,
     highDb: loss.nominal + highExtreme,
     by: loss.by,
+    beside: loss.beside,
   }
 }

@@ -1,5 +1,7 @@
 import { contentName } from './contentName'
+import type { EvidenceData } from './evaluation'
 import { inOrder, livingRecord } from './record'
+import { restsOn } from './restsOn'
 import {
   type Assembly,
   type Basis,
@@ -27,11 +29,11 @@ export type LineItem = {
 /** What one lane says instead of its line. */
 export type LaneFields = Partial<Pick<Line, (typeof LANE_FIELDS)[number]>>
 
-export function lineItems(budget: Budget): LineItem[] {
+export function lineItems(budget: Budget, evidence: EvidenceData): LineItem[] {
   return inOrder(budget, 'lines').map(([id, line]) => {
     const assembly = livingRecord(budget, 'assemblies', line.assembly)
     const lossClass = lossClassOf(budget, line)
-    const content = `${contentName(`lines/${id}`, line)}|${classContent(line, lossClass)}`
+    const content = `${contentName(`lines/${id}`, line)}|${classContent(line, lossClass)}|${restsOn(budget, evidence, line)}`
     return { id, line, lane: null, assembly, lossClass, content }
   })
 }

@@ -1,32 +1,55 @@
 import { contentName } from './contentName'
 import type { Conditions } from './corner'
+import type { EvidenceData } from './evaluation'
 import type { LineItem } from './lineItem'
 import { type LineLoss, lineLoss } from './lineLoss'
 import { rememberedLoss } from './lossMemory'
+import { RESISTANCE, TEMPERATURE, typedValue } from './quantities'
+import type { Budget } from './schema'
 import type { Signalling } from './signalling'
 
 /** The losses that one evaluation asks for: each line, in each of its lanes, at a frequency and in a corner. */
 export class Losses {
   private readonly corners = new Map<Conditions | null, string>()
+  /** Ω, differential; null where the budget does not say it. */
+  readonly reference: number | null
+  /** °C of the reference corner. */
+  readonly referenceTemperature: number | null
 
   constructor(
-    /** Ω, differential; null where the budget does not say it. */
-    private readonly reference: number | null,
+    private readonly budget: Budget,
+    private readonly evidence: EvidenceData,
     private readonly signalling: Signalling,
-  ) {}
-
-  at(item: LineItem, hz: number, corner: Conditions | null): LineLoss {
-    const content = `${item.content}|${hz}|${this.conditions(corner)}`
-    const { reference } = this
-    const { mistake } = this.signalling
-    return rememberedLoss(content, () => lineLoss(item, { hz, reference, corner, mistake }))
+  ) {
+    this.reference = typedValue(RESISTANCE, budget.head.reference)
+    this.referenceTemperature = typedValue(TEMPERATURE, budget.head.referenceTemperature)
   }
 
-  /** A name of what the loss depends on beside the line and the frequency. */
+  at(item: LineItem, hz: number, corner: Conditions | null): LineLoss {
+    return rememberedLoss(`${this.nameOf(item, corner)}|${hz}`, () =>
+      lineLoss(item, {
+        budget: this.budget,
+        evidence: this.evidence,
+        hz,
+        reference: this.reference,
+        referenceTemperature: this.referenceTemperature,
+        symbolRate: this.signalling.evaluation.symbolRate,
+        corner,
+        mistake: this.signalling.mistake,
+      }),
+    )
+  }
+
+  /** A name of everything that a line's loss rests on but the frequency. */
+  nameOf(item: LineItem, corner: Conditions | null): string {
+    return `${item.content}|${this.conditions(corner)}`
+  }
+
   private conditions(corner: Conditions | null): string {
     const known = this.corners.get(corner)
     if (known !== undefined) return known
-    const name = `${this.reference}|${this.signalling.content}|${corner === null ? '' : contentName('corner', corner)}`
+    const own = corner === null ? '' : contentName('corner', corner)
+    const name = `${this.reference}|${this.referenceTemperature}|${this.signalling.content}|${own}`
     this.corners.set(corner, name)
     return name
   }

@@ -13,6 +13,8 @@ export type Spread = {
   readonly highThreeSigma: number
 }
 
+export const NO_SPREAD: Spread = { lowExtreme: 0, highExtreme: 0, lowThreeSigma: 0, highThreeSigma: 0 }
+
 /** The tolerance that applies to a line: its own where it states either side, else its loss class's. */
 export type Tolerance = {
   readonly minus: string | null
@@ -41,28 +43,44 @@ export function toleranceOf(line: Line, lossClass: LossClass | null): Tolerance 
   }
 }
 
+/** A tolerance in decibels, and what its ± means. */
+export type ToleranceDb = { readonly minusDb: number; readonly plusDb: number; readonly meaning: Meaning }
+
 /**
  * @param nominal dB that a tolerance in % is of
- * @param extra dB to each side that moving in frequency added; both laws are possible, so it adds linearly
- * @returns the spread, or the field whose text cannot be read
+ * @param uncertainty share of the loss that the model may be off, read as a limit; counts where nobody states a tolerance
+ * @returns the tolerance in dB, or the field whose text cannot be read
  */
-export function spreadOf(
+export function toleranceDb(
   tolerance: Tolerance | null,
   nominal: number,
-  extra: number,
-): Spread | 'toleranceMinus' | 'tolerancePlus' {
-  if (tolerance === null) {
-    return { lowExtreme: extra, highExtreme: extra, lowThreeSigma: extra, highThreeSigma: extra }
-  }
-  const minus = decibels(tolerance.minus ?? tolerance.plus, nominal)
-  const plus = decibels(tolerance.plus ?? tolerance.minus, nominal)
-  if (minus === null) return 'toleranceMinus'
-  if (plus === null) return 'tolerancePlus'
+  uncertainty: number,
+): ToleranceDb | 'toleranceMinus' | 'tolerancePlus' {
+  if (tolerance === null) return { minusDb: uncertainty * nominal, plusDb: uncertainty * nominal, meaning: 'limit' }
+  const minusDb = decibels(tolerance.minus ?? tolerance.plus, nominal)
+  const plusDb = decibels(tolerance.plus ?? tolerance.minus, nominal)
+  if (minusDb === null) return 'toleranceMinus'
+  if (plusDb === null) return 'tolerancePlus'
+  return { minusDb, plusDb, meaning: tolerance.meaning }
+}
+
+/** @param extra dB to each side that moving in frequency added; both laws are possible, so it adds linearly */
+export function spreadOf({ minusDb, plusDb, meaning }: ToleranceDb, extra: number): Spread {
   return {
-    lowExtreme: extremeOf(minus, tolerance.meaning) + extra,
-    highExtreme: extremeOf(plus, tolerance.meaning) + extra,
-    lowThreeSigma: 3 * sigmaOf(minus, tolerance.meaning) + extra,
-    highThreeSigma: 3 * sigmaOf(plus, tolerance.meaning) + extra,
+    lowExtreme: extremeOf(minusDb, meaning) + extra,
+    highExtreme: extremeOf(plusDb, meaning) + extra,
+    lowThreeSigma: 3 * sigmaOf(minusDb, meaning) + extra,
+    highThreeSigma: 3 * sigmaOf(plusDb, meaning) + extra,
+  }
+}
+
+/** Two spreads of one line that have nothing to do with each other: extremes add, sigmas by the root of the sum of squares. */
+export function both(a: Spread, b: Spread): Spread {
+  return {
+    lowExtreme: a.lowExtreme + b.lowExtreme,
+    highExtreme: a.highExtreme + b.highExtreme,
+    lowThreeSigma: Math.hypot(a.lowThreeSigma, b.lowThreeSigma),
+    highThreeSigma: Math.hypot(a.highThreeSigma, b.highThreeSigma),
   }
 }
 

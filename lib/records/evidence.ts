@@ -15,6 +15,11 @@ export class EvidenceTooLarge extends Error {
 
 const SHA256 = /^[0-9a-f]{64}$/
 
+/** Where a file with this SHA-256 lies, if it is there; null for what is no SHA-256. Nothing that a person names is in a path. */
+export function evidencePath(directory: string, sha256: string): string | null {
+  return SHA256.test(sha256) ? join(directory, sha256.slice(0, 2), sha256) : null
+}
+
 /**
  * Opens the evidence files below a directory, one file per SHA-256, and removes what an upload that was cut off left
  * behind. Nothing that a person names ever becomes part of a path.
@@ -27,9 +32,8 @@ export async function openEvidence(directory: string): Promise<EvidenceFiles> {
 
   const shelf = (sha256: string) => join(directory, sha256.slice(0, 2))
   const find = async (sha256: string) => {
-    if (!SHA256.test(sha256)) return null
-    const path = join(shelf(sha256), sha256)
-    return (await isFile(path)) ? path : null
+    const path = evidencePath(directory, sha256)
+    return path !== null && (await isFile(path)) ? path : null
   }
 
   return {

@@ -1,10 +1,12 @@
 import { createServer } from 'node:http'
+import { join } from 'node:path'
 import { openAccess } from '../access/open'
 import { ENGINE } from '../budget/engine'
 import { openStore } from '../records/open'
 import type { Store } from '../records/types'
 import { openSync } from '../sync/open'
 import type { Config } from './boot/config.mjs'
+import { openEvaluator } from './evaluation/open'
 import { guard } from './guard'
 import { openPages } from './pages'
 import { publish } from './publish'
@@ -34,7 +36,8 @@ export async function startServer(
   const secret = await readSecret(config.directory)
   const { publicUrl } = config
   const access = await openAccess({ records: store.records, publicUrl, secret, clock: Date.now, log })
-  const sync = await openSync({ store, sessions: access, publicUrl, engine: ENGINE, clock: Date.now, log })
+  const evaluator = openEvaluator(join(config.directory, 'evidence'))
+  const sync = await openSync({ store, sessions: access, publicUrl, engine: ENGINE, evaluator, clock: Date.now, log })
   publish({
     publicUrl,
     demo: config.mode === 'demo',
@@ -43,6 +46,7 @@ export async function startServer(
     budgets: sync.budgets,
     evidence: sync.evidence,
     catalogues: sync.catalogues,
+    evaluate: evaluator.evaluateAlone.bind(evaluator),
     ready: () => ready(store),
     submit: sync.submit,
   })
@@ -74,6 +78,7 @@ export async function startServer(
       await closed
       await pages?.close()
       access.close()
+      await evaluator.close()
       await store.close()
     },
   }

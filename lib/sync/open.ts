@@ -7,6 +7,7 @@ import { createBudgetService } from './budgets/service'
 import { createCatalogueService } from './catalogues'
 import { type Clock, type Log, systemTimers, type Timers } from './clock'
 import { Committer } from './committer'
+import type { Evaluator } from './evaluator'
 import { createEvidenceService } from './evidence'
 import { Rooms } from './rooms'
 import type { Services } from './services'
@@ -21,6 +22,7 @@ export type SyncOptions = {
   readonly publicUrl: string
   /** Version of the evaluation, kept with every entry. */
   readonly engine: string
+  readonly evaluator: Evaluator
   /** Milliseconds since 1970. */
   readonly clock: () => number
   readonly log: Log
@@ -37,14 +39,14 @@ export type Sync = Pick<Services, 'budgets' | 'evidence' | 'catalogues' | 'submi
 
 /** Opens the shared editing of budgets over a store. It finishes first what a stop has left half made. */
 export async function openSync(options: SyncOptions): Promise<Sync> {
-  const { store, sessions, publicUrl, engine, log } = options
+  const { store, sessions, publicUrl, engine, evaluator, log } = options
   const { journal, records } = store
   const clock: Clock = { ...(options.timers ?? systemTimers), now: options.clock }
   await finishBudgets(journal, records, log)
   const committer = new Committer(journal, clock, log)
   const snapshots = new Snapshots(journal, log)
   const problems = new Map(store.problems.map(({ budget, what }) => [budget, what]))
-  const rooms = new Rooms({ journal, records, sessions, committer, snapshots, clock, log, engine, problems })
+  const rooms = new Rooms({ journal, records, sessions, committer, snapshots, clock, log, engine, evaluator, problems })
   const collabs: Collab[] = []
   const stopListening = sessions.onRevoked((revoked) => {
     if ('session' in revoked) for (const room of rooms.all()) room.closeSession(revoked.session)
@@ -53,9 +55,9 @@ export async function openSync(options: SyncOptions): Promise<Sync> {
 
   return {
     budgets: createBudgetService(
-      { journal, records, committer, now: clock.now, engine, log },
+      { journal, records, committer, now: clock.now, engine, evaluator, log },
       records,
-      new Reader(journal, rooms),
+      new Reader(journal, rooms, evaluator),
       rooms,
     ),
     evidence: createEvidenceService(store.evidence, records, clock.now),

@@ -4,6 +4,7 @@ import type { Records } from '../records/types'
 import { CLOSE } from '../sheet/closeCodes'
 import type { Cancel, Clock, Log } from './clock'
 import type { Committer } from './committer'
+import type { Evaluator } from './evaluator'
 import { fillEffects } from './room/fillEffects'
 import { loadDocument } from './room/load'
 import { Room } from './room/room'
@@ -18,6 +19,7 @@ export type RoomsDeps = {
   readonly clock: Clock
   readonly log: Log
   readonly engine: string
+  readonly evaluator: Pick<Evaluator, 'margins'>
   /** Budgets whose record and journal do not agree: id → what to do. */
   readonly problems: ReadonlyMap<string, string>
 }
@@ -88,7 +90,7 @@ export class Rooms {
   }
 
   private async load(budget: string): Promise<Room | Locked | null> {
-    const { journal, records, log } = this.deps
+    const { journal, records, evaluator, log } = this.deps
     const record = await records.budgets.byId(budget)
     if (!record) return null
     if (record.state === 'abandoned')
@@ -104,7 +106,7 @@ export class Rooms {
       broken: (broken) => this.evict(broken),
     })
     this.open.set(budget, { room, usedAt: this.deps.clock.now() })
-    fillEffects(journal, budget, room.state).catch((cause) =>
+    fillEffects(journal, evaluator, budget, room.state).catch((cause) =>
       log(`Effects of budget ${budget} that a stop left out could not be found`, cause),
     )
     return room

@@ -1,6 +1,7 @@
 import type { Identity } from '../access/identity'
 import type { AccessService } from '../access/service'
 import type { OwnEntry } from '../budget/catalogues/ownEntry'
+import type { Asked } from '../budget/context'
 import type { Evaluation } from '../budget/evaluation'
 import type { Budget, Verdict } from '../budget/schema'
 import type { Operation } from '../sheet/change'
@@ -20,6 +21,8 @@ export type Services = {
   readonly budgets: BudgetService
   readonly evidence: EvidenceService
   readonly catalogues: CatalogueService
+  /** Evaluates a budget that is stored nowhere, and so without files. */
+  evaluate(budget: Budget, asked: Asked): Promise<Evaluation>
   /** Null where both databases answer, else what is wrong, in words that may be shown to anybody. */
   ready(): Promise<string | null>
   /** The way in for everything but a worksheet's socket: same gate, journal and fan-out. */

@@ -37,7 +37,15 @@ describe('words', () => {
 
   it('of a corner: its name and temperature, else the temperature of the reference', () => {
     const head = { ...tamarack.budget.head, referenceTemperature: '25 °C' }
-    const judged = { corner: 'reference corner', statistic: 'nominal', lane: null, lanes: 1 } as const
+    const judged = {
+      corner: 'reference corner',
+      statistic: 'nominal',
+      lane: null,
+      lanes: 1,
+      shortestLane: null,
+      movedDb: null,
+      unmovedDb: null,
+    } as const
     expect(cornerWords({ id: 'x', judged }, { ...tamarack.budget, head })).toBe('25 °C')
   })
 

@@ -25,7 +25,6 @@ const RAISED: Readonly<Record<FlagCode, readonly [Partial<BudgetFile>, string, s
   'rate-type-not-said': [{ head: { ...head, rateType: null } }, 'head', null, 'rateType'],
   'no-allowance': [{ allowances: {} }, 'head', null, null],
   'model-missing': [a({ model: null }), 'lines', 'a', 'model'],
-  'model-not-computed': [a({ model: 'via' }), 'lines', 'a', 'model'],
   'field-missing': [a({}, null), 'lines', 'a', 'loss'],
   'unreadable-value': [a({ model: 'table', points: 'x' }), 'lines', 'a', 'points'],
   'class-missing': [a({ model: 'class', length: '1 in' }), 'lines', 'a', 'lossClass'],

@@ -2,9 +2,18 @@ import { type Budget, type BudgetFile, budgetSchema } from '../../lib/budget/sch
 
 type LineFile = NonNullable<BudgetFile['lines']>[string]
 
-/** A stated line of 10 GHz. */
+/** A measured line, stated at 10 GHz. */
 export function line(order: string, loss: string | null, rest: Partial<LineFile> = {}): LineFile {
-  return { order, name: `Line ${order}`, kind: 'other', model: 'stated', loss, at: '10 GHz', ...rest }
+  return {
+    order,
+    name: `Line ${order}`,
+    kind: 'other',
+    model: 'stated',
+    basis: 'measured',
+    loss,
+    at: '10 GHz',
+    ...rest,
+  }
 }
 
 /** A link of 20 Gb/s NRZ, Nyquist 10 GHz, 100 Ω, from TX ball (a0) to RX ball (z0), with one allowance of 12 dB and 1 dB of required margin. */

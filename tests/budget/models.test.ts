@@ -192,17 +192,8 @@ describe('a pad', () => {
   })
 })
 
-describe('models that this version does not compute', () => {
-  it.each(['geometry', 'via', 'package-line', 'ac-capacitor', 'cable', 'network'] as const)(
-    '%s gives no number',
-    (model) => {
-      const found = one({ model, loss: '1 dB', at: '10 GHz' })
-      expect(found.db).toBeNull()
-      expect(codes(found)).toEqual(['model-not-computed'])
-    },
-  )
-
-  it('and a line without a model has none', () => {
+describe('a line without a model', () => {
+  it('has no number', () => {
     expect(codes(one({}))).toEqual(['model-missing'])
   })
 })

@@ -133,7 +133,7 @@ describe('planes and channel order', () => {
 })
 
 describe('what stands beside the limit', () => {
-  it('a curve and a floor are not judged, and the verdict says so', () => {
+  it('a curve and a floor are unknown where lines have no data over the band, and the verdict says so', () => {
     const curve = '0.05..10 GHz: 1 + 2 sqrt(f)'
     const { allowances, flags } = judged({
       a: allowance('a0', 'tx', 'edge', { curve }),

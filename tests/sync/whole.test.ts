@@ -11,6 +11,7 @@ import { openAccess } from '../../lib/access/open'
 import { ENGINE } from '../../lib/budget/engine'
 import { openStore } from '../../lib/records/open'
 import { encodeMessage, MESSAGE } from '../../lib/sheet/wire'
+import { evaluatorHere } from '../../lib/sync/evaluator'
 import { openSync } from '../../lib/sync/open'
 import { lossOf, setLoss } from './support/changes'
 import { Page } from './support/page'
@@ -26,7 +27,15 @@ async function openWhole() {
   const store = await openStore(directory)
   const secret = 'Zr8vQ2m1Lw0pXk7TtYb4Nc6Hs9Fd3Ga5'
   const access = await openAccess({ records: store.records, publicUrl: PUBLIC_URL, secret, clock: Date.now, log })
-  const sync = await openSync({ store, sessions: access, publicUrl: PUBLIC_URL, engine: ENGINE, clock: Date.now, log })
+  const sync = await openSync({
+    store,
+    sessions: access,
+    publicUrl: PUBLIC_URL,
+    engine: ENGINE,
+    evaluator: evaluatorHere(new Map()),
+    clock: Date.now,
+    log,
+  })
   const server = createServer()
   sync.attach(server)
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve))

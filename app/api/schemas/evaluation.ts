@@ -2,6 +2,7 @@ import { z } from 'zod'
 import type { Evaluation } from '../../../lib/budget/evaluation'
 import { FLAGS, type FlagCode } from '../../../lib/budget/flags'
 import { BASES, GRADES, OWNERS, STATISTICS, VERDICTS } from '../../../lib/budget/schema'
+import { buildsEvaluation, channelEvaluation } from './channel'
 import { component } from './components'
 import { sections } from './sections'
 
@@ -17,7 +18,8 @@ const lineEvaluation = z.strictObject({
     nominalDb: known,
     lowDb: known,
     highDb: known,
-    by: z.enum(['stated', 'moved', 'table', 'computed']).nullable(),
+    by: z.enum(['stated', 'moved', 'table', 'computed', 'measured']).nullable(),
+    beside: z.array(z.strictObject({ what: z.enum(['mismatch', 'dissipated', 'native', 'point']), db: decibels })),
   }),
   lane: z.number().int().nullable(),
   owner: z.enum(OWNERS).nullable(),
@@ -38,6 +40,9 @@ const allowanceEvaluation = z.strictObject({
     statistic: z.enum(STATISTICS),
     lane: z.number().int().nullable(),
     lanes: z.number().int(),
+    shortestLane: z.number().int().nullable(),
+    movedDb: known,
+    unmovedDb: known,
   }),
   verdict: z.enum(VERDICTS),
   words: z.string(),
@@ -52,6 +57,8 @@ const allowanceEvaluation = z.strictObject({
   nominalDb: known,
   worstDb: known,
   rssDb: known,
+  channel: channelEvaluation.nullable(),
+  builds: buildsEvaluation.nullable(),
   byBasis: z.record(z.enum([...BASES, 'unsaid']), decibels),
   lines: z.array(z.strictObject({ id: z.string(), countedDb: known, lowDb: known, highDb: known })),
   shares: z.array(

@@ -26,7 +26,7 @@ export function judgedConditions(context: Context, allowance: Allowance): Judged
   if (judgedCorner === null) return { statistic, lane: judgedLane, corner: null, problem: null, problemField: null }
   const corner = livingRecord(context.budget, 'corners', judgedCorner)
   const conditions = corner
-    ? conditionsOf(judgedCorner, corner, context.referenceTemperature)
+    ? conditionsOf(judgedCorner, corner, context.losses.referenceTemperature)
     : 'the corner that it is to be judged at does not exist or was taken out'
   if (typeof conditions === 'string') {
     return { statistic, lane: judgedLane, corner: null, problem: conditions, problemField: 'judgedCorner' }

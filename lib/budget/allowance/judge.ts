@@ -3,11 +3,15 @@ import { formatScaled } from '../../channel/units'
 import type { Context } from '../context'
 import type { AllowanceEvaluation } from '../evaluation'
 import { basisOf, type LineItem } from '../lineItem'
-import { FREQUENCY, LOSS, typedValue } from '../quantities'
+import { LOSS, typedValue } from '../quantities'
 import { nameOf } from '../record'
 import type { Allowance, Basis } from '../schema'
+import { buildsOf } from './builds'
 import { type JudgedConditions, judgedConditions } from './conditions'
+import { type CornerMoves, movesOf } from './cornerMoves'
 import { type LaneSum, laneSums } from './laneSums'
+import { type Limit, limitOf } from './limit'
+import { type OverFrequency, overFrequency } from './overFrequency'
 import { sharesOf } from './shares'
 import { type Span, spanOf } from './span'
 import { type Counted, countedLine, judgedHigh, judgedLow } from './sum'
@@ -18,24 +22,41 @@ export type Judged = {
   readonly allowance: Allowance
   readonly evaluation: AllowanceEvaluation
   readonly span: Span
+  readonly limit: Limit
   readonly conditions: JudgedConditions
   /** The lane that decides. */
   readonly lane: LaneSum
   readonly lanes: readonly LaneSum[]
+  /** What the corner did in that lane; null in the reference corner. */
+  readonly moved: CornerMoves | null
 }
 
 export function judge(context: Context, id: string, allowance: Allowance): Judged {
-  const nyquist = context.signalling.evaluation.nyquist
-  const ownHz = typedValue(FREQUENCY, allowance.at)
-  const atHz = ownHz ?? nyquist
+  const limit = limitOf(allowance, context.signalling.evaluation.nyquist)
   const span = spanOf(context, allowance)
   const conditions = judgedConditions(context, allowance)
-  const lanes = laneSums(context, allowance, span, conditions, atHz)
-  const facts = commonFacts(context, allowance, span, conditions, atHz)
+  const lanes = laneSums(context, allowance, span, conditions, limit.atHz)
+  const facts = commonFacts(context, allowance, span, conditions, limit)
   const judged = lanes.map((lane) => ({ lane, judgement: verdictOf(laneFacts(facts, lane, conditions)) }))
-  const { lane, judgement } = judged.reduce((worst, next) => (worse(next, worst, conditions) ? next : worst))
-  const evaluation = evaluationOf(context, id, allowance, { span, conditions, lane, lanes, judgement, facts, atHz })
-  return { allowance, evaluation, span, conditions, lane, lanes }
+  const { lane } = judged.reduce((worst, next) => (worse(next, worst, conditions) ? next : worst))
+  const shortest = lanes.reduce((least, next) => (next.sum.nominal < least.sum.nominal ? next : least))
+  const swept =
+    span.from === null
+      ? { channel: null, missed: [], unknown: unknownBeside(allowance) }
+      : overFrequency(context, allowance, limit, conditions, lane, shortest)
+  const judgement = verdictOf({ ...laneFacts(facts, lane, conditions), missed: swept.missed, unknown: swept.unknown })
+  const moved = movesOf(context, conditions.corner, lane, limit.atHz)
+  const parts: Parts = { span, conditions, lane, lanes, shortest, judgement, facts, swept, moved, limit }
+  return {
+    allowance,
+    evaluation: evaluationOf(context, id, allowance, parts),
+    span,
+    limit,
+    conditions,
+    lane,
+    lanes,
+    moved,
+  }
 }
 
 type InLane = { readonly lane: LaneSum; readonly judgement: Judgement }
@@ -56,25 +77,30 @@ function commonFacts(
   allowance: Allowance,
   span: Span,
   conditions: JudgedConditions,
-  atHz: number | null,
+  { db, atHz, blocked }: Limit,
 ): CommonFacts {
   const nyquist = context.signalling.evaluation.nyquist
-  const blocked = [
-    ...span.problems.map(({ reason }) => reason),
-    ...(conditions.problem === null ? [] : [conditions.problem]),
-    ...(atHz === null ? ['neither the allowance nor the link says a frequency'] : []),
-  ]
   const atNyquist = atHz !== null && nyquist !== null && holdsAt(nyquist, atHz)
-  const curve = (allowance.curve?.trim() ?? '') !== ''
   return {
-    limit: typedValue(LOSS, allowance.limit),
+    limit: db,
     requiredMargin: typedValue(LOSS, allowance.requiredMargin) ?? 0,
     leastLoss: typedValue(LOSS, allowance.leastLoss),
-    blocked,
-    unknown: [...(curve ? ['limit curve'] : []), ...(allowance.returnLossFloor === null ? [] : ['return loss'])],
+    blocked: [
+      ...span.problems.map(({ reason }) => reason),
+      ...(conditions.problem === null ? [] : [conditions.problem]),
+      ...(atHz === null ? ['neither the allowance nor the link says a frequency'] : []),
+      ...(blocked === null ? [] : [blocked]),
+    ],
+    missed: [],
+    unknown: [],
     where: atNyquist || atHz === null ? 'at Nyquist' : `at ${formatScaled(atHz, 'frequency')}`,
     atNyquist,
   }
+}
+
+function unknownBeside(allowance: Allowance): string[] {
+  const curve = (allowance.curve?.trim() ?? '') !== ''
+  return [...(curve ? ['limit curve'] : []), ...(allowance.returnLossFloor === null ? [] : ['return loss'])]
 }
 
 function laneFacts(common: CommonFacts, { sum, cornerUnknown }: LaneSum, { statistic }: JudgedConditions): Facts {
@@ -93,13 +119,17 @@ type Parts = {
   readonly conditions: JudgedConditions
   readonly lane: LaneSum
   readonly lanes: readonly LaneSum[]
+  readonly shortest: LaneSum
   readonly judgement: Judgement
   readonly facts: CommonFacts
-  readonly atHz: number | null
+  readonly swept: OverFrequency
+  readonly moved: CornerMoves | null
+  readonly limit: Limit
 }
 
 function evaluationOf(context: Context, id: string, allowance: Allowance, parts: Parts): AllowanceEvaluation {
-  const { span, conditions, lane, lanes, judgement, facts, atHz } = parts
+  const { span, conditions, lane, lanes, shortest, judgement, facts, swept, moved } = parts
+  const { atHz } = parts.limit
   const { sum } = lane
   const known = judgedHigh(sum, conditions.statistic)
   const whole = span.from !== null && sum.undecided.length === 0 && atHz !== null
@@ -117,10 +147,13 @@ function evaluationOf(context: Context, id: string, allowance: Allowance, parts:
       statistic: conditions.statistic,
       lane: conditions.lane ?? (lanes.length > 1 ? lane.number : null),
       lanes: context.lanes.count,
+      shortestLane: lanes.length > 1 ? shortest.number : null,
+      movedDb: moved?.movedDb ?? null,
+      unmovedDb: moved?.unmovedDb ?? null,
     },
     verdict: judgement.verdict,
     words: judgement.words,
-    reasons: reasonsOf(judgement, lane, facts.unknown),
+    reasons: reasonsOf(judgement, lane, swept.unknown),
     from: span.from,
     to: span.to,
     knownDb: known,
@@ -131,6 +164,8 @@ function evaluationOf(context: Context, id: string, allowance: Allowance, parts:
     nominalDb: whole ? sum.nominal : null,
     worstDb: whole ? sum.worst : null,
     rssDb: whole ? sum.rssUp : null,
+    channel: swept.channel,
+    builds: buildsOf(context, parts.limit, conditions, lane, comparable),
     byBasis: byBasis(lane.lines),
     lines: lane.lines.map(countedLine),
     shares: sharesOf(context.budget, id, lane.lines),
@@ -143,7 +178,7 @@ function reasonsOf(judgement: Judgement, lane: LaneSum, unknown: readonly string
   return [
     ...judgement.reasons,
     ...open.map(({ item }) => `${nameOf('lines', item.id, item.line)} has no number`),
-    ...unknown.map((what) => `the ${what} is not judged in this version`),
+    ...unknown.map((what) => `the ${what} is not known: not every line has data over the band`),
   ]
 }
 

@@ -2,7 +2,7 @@ import type { Context } from '../context'
 import type { Conditions } from '../corner'
 import { distinctLanes, inLane } from '../lanes'
 import type { LineItem } from '../lineItem'
-import type { LineLoss } from '../lineLoss'
+import { type LineLoss, noLoss } from '../lineLoss'
 import type { Allowance } from '../schema'
 import type { JudgedConditions } from './conditions'
 import { overlapIn } from './overlap'
@@ -56,13 +56,7 @@ function laneCounter(context: Context, span: Span, corner: Conditions | null, at
     })
 }
 
-const NO_NUMBER: LineLoss = {
-  nominal: null,
-  by: null,
-  spread: { lowExtreme: 0, highExtreme: 0, lowThreeSigma: 0, highThreeSigma: 0 },
-  cornerUnknown: null,
-  drafts: [],
-}
+const NO_NUMBER: LineLoss = noLoss([])
 
 function signOf(context: Context, item: LineItem, between: ReadonlySet<string>): Counted['sign'] | 'unnamed' {
   if (item.line.kind !== 'overlap') return 1

@@ -14,6 +14,8 @@ export type Facts = {
   readonly overlapUndecided: boolean
   /** Why nothing can be compared with the limit, in sentences. */
   readonly blocked: readonly string[]
+  /** What is missed beside the loss (a limit curve, a return-loss floor), as half sentences. */
+  readonly missed: readonly string[]
   /** What cannot be judged beside the loss: 'limit curve', 'return loss'. */
   readonly unknown: readonly string[]
   /** 'at 12.8906 GHz' where the limit does not stand at the Nyquist frequency, else 'at Nyquist'. */
@@ -59,6 +61,7 @@ function decided(facts: Facts, margin: number, place: string): Judgement {
   if (leastLoss !== null && lowest < leastLoss - EXACT) {
     missed.push(`${plainDb(leastLoss - lowest)} dB under the least loss of ${plainDb(leastLoss)} dB`)
   }
+  missed.push(...facts.missed)
   if (missed.length > 0) {
     return { verdict: 'tight', words: `tight${place}: ${missed.join('; ')}${unknownWords}`, reasons: missed }
   }

@@ -89,25 +89,50 @@ function* frequency(one: Judged, nyquist: number | null, mistake: (hz: number) =
 }
 
 function* beside(one: Judged): Generator<FlagDraft> {
-  const { allowance } = one
-  if ((allowance.curve?.trim() ?? '') !== '') {
+  for (const { code, field, message, todo } of one.limit.remarks) yield flag(one, code, field, message, todo)
+  const { channel } = one.evaluation
+  const lacking = channel === null ? [] : [...channel.withoutBand, ...channel.withoutReflection]
+  const which =
+    lacking.length === 0
+      ? 'its lines have no data over the band'
+      : `${lacking.length} of its lines lack data over the band`
+  if ((one.allowance.curve?.trim() ?? '') !== '' && !channel?.curve?.whole && !channel?.curve?.missed) {
     yield flag(
       one,
       'curve-not-judged',
       'curve',
-      'has a limit curve, which this version does not judge.',
-      'Hold the loss over frequency against the curve by hand.',
+      `has a limit curve that cannot be judged: ${which}.`,
+      'Give every line between its planes a model or a file that reaches over the curve.',
     )
   }
-  if (allowance.returnLossFloor !== null) {
+  if (one.allowance.returnLossFloor !== null && !channel?.returnLoss) {
     yield flag(
       one,
       'floor-not-judged',
       'returnLossFloor',
-      'asks for a return loss, which this version does not judge.',
-      'Hold the return loss against it by hand.',
+      `asks for a return loss that cannot be judged: ${which}, reflections included.`,
+      'Give every line between its planes a model or a file that knows its reflections.',
     )
   }
+  yield* sumAgainstFit(one)
+}
+
+/** Sum and fitted cascade of the same lines may differ by this much before it is said (design rule of the comparison). */
+const DIFFERS_DB = 0.5
+const DIFFERS_SHARE = 0.03
+
+function* sumAgainstFit(one: Judged): Generator<FlagDraft> {
+  const { channel } = one.evaluation
+  if (channel === null || channel.fittedDb === null) return
+  const difference = channel.fittedDb - channel.coveredDb
+  if (Math.abs(difference) <= Math.max(DIFFERS_DB, DIFFERS_SHARE * channel.coveredDb)) return
+  yield flag(
+    one,
+    'cascade-differs',
+    'limit',
+    `adds up to ${channel.coveredDb.toFixed(2)} dB over the lines that can be joined, and their cascade, fitted, loses ${channel.fittedDb.toFixed(2)} dB.`,
+    'Look for a resonance or a mismatch; the larger of the two is the careful one.',
+  )
 }
 
 function flag(one: Judged, code: FlagDraft['code'], field: string, message: string, todo: string): FlagDraft {

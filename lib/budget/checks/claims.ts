@@ -1,29 +1,33 @@
 import type { FlagDraft } from '../flags'
 import { basisOf, gradeOf, groupOffWithoutNote, type LineItem } from '../lineItem'
-import { livingRecord, nameOf } from '../record'
-import { type Budget, COVERS } from '../schema'
-import { spreadOf, toleranceOf } from '../tolerance'
-import type { Check } from './check'
+import { COVERS } from '../schema'
+import { toleranceDb, toleranceOf } from '../tolerance'
+import type { LineCheck } from './check'
 import { lineFlag } from './lineFlag'
 
 /** A typical value below this many decibels is too small to matter. */
 const TYPICAL_MATTERS_DB = 0.5
 
-/** What lines claim about their numbers, and what does not go together. */
-export const claims: Check = function* ({ context, lines }) {
-  for (const item of context.items) {
-    yield* grades(item, lines.get(item.id)?.loss.nominalDb ?? null)
-    yield* groups(item)
-    yield* coverCodes(item)
-    yield* fixtures(context.budget, item)
+/** What a line claims about its number, and what does not go together. */
+export const claims: LineCheck = function* (item, { nominal }) {
+  yield* grades(item, nominal)
+  if (groupOffWithoutNote(item.line)) {
+    yield lineFlag(
+      item,
+      'group-off-without-note',
+      'groupNote',
+      'is said to vary on its own without a reason; it stays in the group of its assembly.',
+      'Write why it varies on its own, or clear the group.',
+    )
   }
+  yield* coverCodes(item)
 }
 
 function* grades(item: LineItem, nominal: number | null): Generator<FlagDraft> {
   const grade = gradeOf(item)
   const tolerance = toleranceOf(item.line, item.lossClass)
-  const spread = spreadOf(tolerance, nominal ?? 1, 0)
-  const raised = typeof spread !== 'string' && spread.highExtreme > 0
+  const stated = tolerance === null ? 'none' : toleranceDb(tolerance, nominal ?? 1, 0)
+  const raised = typeof stated !== 'string' && stated.plusDb > 0
   if (grade === 'maximum' && raised) {
     yield lineFlag(
       item,
@@ -54,17 +58,6 @@ function* grades(item: LineItem, nominal: number | null): Generator<FlagDraft> {
   }
 }
 
-function* groups(item: LineItem): Generator<FlagDraft> {
-  if (!groupOffWithoutNote(item.line)) return
-  yield lineFlag(
-    item,
-    'group-off-without-note',
-    'groupNote',
-    'is said to vary on its own without a reason; it stays in the group of its assembly.',
-    'Write why it varies on its own, or clear the group.',
-  )
-}
-
 /** Kinds whose numbers are most often misread for want of saying what they include. */
 const MUST_SAY = ['connector', 'cable', 'package']
 
@@ -85,22 +78,5 @@ function* coverCodes(item: LineItem): Generator<FlagDraft> {
     'covers',
     `is a ${kind} and covers ${foreign.join(', ')}, which its kind cannot.`,
     'Tick what it covers again.',
-  )
-}
-
-/** Fixtures that an overlap takes out again are accounted for. */
-function* fixtures(budget: Budget, item: LineItem): Generator<FlagDraft> {
-  const evidence = livingRecord(budget, 'evidence', item.line.evidence ?? item.lossClass?.evidence ?? null)
-  const said = item.line.covers?.split(' ').includes('test-fixtures') ?? false
-  if (!said && evidence?.fixtures !== 'in') return
-  const overlaps = Object.values(budget.lines).filter(({ kind, removed }) => kind === 'overlap' && !removed)
-  if (overlaps.some(({ overlapA, overlapB }) => overlapA === item.id || overlapB === item.id)) return
-  const why = said ? 'its number covers them' : `its file ${nameOf('evidence', item.line.evidence, evidence)} says so`
-  yield lineFlag(
-    item,
-    'fixtures-in',
-    said ? 'covers' : 'evidence',
-    `contains test fixtures: ${why}.`,
-    'Take the number with the fixtures removed, or subtract them by an overlap line that names both lines.',
   )
 }

@@ -1,12 +1,10 @@
-import { cornerFactor, holdsIn } from '../corner'
-import type { FlagDraft } from '../flags'
-import type { LineItem } from '../lineItem'
+import { holdsIn } from '../corner'
+import { cornerFactor } from '../cornerFactor'
 import type { Check } from './check'
 import { lineFlag } from './lineFlag'
 
-/** Numbers that hold in other conditions than they are counted in. */
-export const conditions: Check = function* ({ context, judged }) {
-  for (const item of context.items) yield* otherThanReference(item, context.referenceTemperature)
+/** Maxima that do not say their temperature and were put through a corner. */
+export const conditions: Check = function* ({ judged }) {
   for (const { conditions: asked, span } of judged) {
     const { corner } = asked
     if (corner === null) continue
@@ -23,19 +21,4 @@ export const conditions: Check = function* ({ context, judged }) {
       )
     }
   }
-}
-
-function* otherThanReference(item: LineItem, reference: number | null): Generator<FlagDraft> {
-  const { temperature, humidity } = holdsIn(item.line, item.lossClass)
-  const warm = temperature !== null && reference !== null && temperature !== reference
-  if (!warm && humidity !== 'wet') return
-  const holds = [warm ? `at ${temperature} °C` : '', humidity === 'wet' ? 'wet' : ''].filter(Boolean).join(' and ')
-  const corner = reference === null ? 'dry' : `${reference} °C, dry`
-  yield lineFlag(
-    item,
-    'other-conditions',
-    'conditionTemperature',
-    `holds ${holds}; in the reference corner (${corner}) it counts as it is.`,
-    'Give the number in the conditions of the reference corner.',
-  )
 }

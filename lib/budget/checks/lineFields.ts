@@ -4,14 +4,13 @@ import type { Check } from './check'
 /** Fields of a line that say something the number does not follow. */
 export const lineFields: Check = function* ({ context }) {
   for (const { id, line, lossClass } of context.items) {
-    const name = nameOf('lines', id, line)
     if ((line.count ?? 1) > 1) {
       yield {
         code: 'count-not-used',
         section: 'lines',
         id,
         field: 'count',
-        message: `${name} says that it stands for ${line.count} alike, and counts once.`,
+        message: `${nameOf('lines', id, line)} says that it stands for ${line.count} alike, and counts once.`,
         todo: 'State the loss of all of them, or make a line of each.',
       }
     }
@@ -23,7 +22,7 @@ export const lineFields: Check = function* ({ context }) {
       section: 'lines',
       id,
       field: 'lossClass',
-      message: `${name} uses the loss class ${nameOf('lossClasses', line.lossClass, lossClass)} of ${nameOf('assemblies', lossClass.assembly, other)}.`,
+      message: `${nameOf('lines', id, line)} uses the loss class ${nameOf('lossClasses', line.lossClass, lossClass)} of ${nameOf('assemblies', lossClass.assembly, other)}.`,
       todo: 'Choose a loss class of its own assembly.',
     }
   }

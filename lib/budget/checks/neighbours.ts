@@ -5,12 +5,30 @@ import type { Check } from './check'
 import { COVER_RULES, type CoverRule, type End } from './coverRules'
 
 /** What two neighbours both count, or neither. Reserve and overlap are no pieces of the channel; planes do not part neighbours. */
-export const neighbours: Check = function* ({ context }) {
-  const pieces = context.items.filter(({ line }) => line.kind !== 'reserve' && line.kind !== 'overlap')
-  for (let right = 1; right < pieces.length; right++) {
-    const [a, b] = [pieces[right - 1], pieces[right]]
-    if (a && b) yield* atJoint(a, b)
+export const neighbours: Check = ({ context }) => {
+  const found: FlagDraft[] = []
+  let left: LineItem | null = null
+  for (const item of context.items) {
+    if (item.line.kind === 'reserve' || item.line.kind === 'overlap') continue
+    if (left !== null) for (const draft of remembered(left, item)) found.push(draft)
+    left = item
   }
+  return found
+}
+
+/** Joints kept; more than a worksheet has, for several worksheets. */
+const MOST = 20_000
+
+/** Content of the left line → of the right one, and what was found between them. */
+const kept = new Map<string, { readonly right: string; readonly drafts: readonly FlagDraft[] }>()
+
+function remembered(left: LineItem, right: LineItem): readonly FlagDraft[] {
+  const known = kept.get(left.content)
+  if (known?.right === right.content) return known.drafts
+  if (kept.size >= MOST) kept.clear()
+  const drafts = [...atJoint(left, right)]
+  kept.set(left.content, { right: right.content, drafts })
+  return drafts
 }
 
 function* atJoint(left: LineItem, right: LineItem): Generator<FlagDraft> {

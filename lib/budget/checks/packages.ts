@@ -11,6 +11,8 @@ const BALLS: readonly PlaneCode[] = ['tx-ball', 'rx-ball']
 const DIES: readonly PlaneCode[] = ['tx-die', 'rx-die']
 const INSIDE_PACKAGE: readonly PlaneCode[] = ['tx-bump', 'rx-bump', 'tx-die', 'rx-die']
 
+type Ends = { readonly from: PlaneCode | null; readonly to: PlaneCode | null }
+
 /** Packages against the planes and against what the limit presumes. */
 export const packages: Check = function* ({ context, judged }) {
   for (const one of judged) {
@@ -29,10 +31,10 @@ function* againstPlanes(
   const codeOf = (plane: string) => livingRecord(context.budget, 'planes', plane)?.code ?? null
   const ends = { from: codeOf(from), to: codeOf(to) }
   const name = nameOf('allowances', evaluation.id, evaluation)
-  const found = span.items.filter(isPackage)
   yield* dies(span.items, ends, name)
+  yield* missingDies(span.items, ends, evaluation.id, name)
   if (ends.from !== null && ends.to !== null && BALLS.includes(ends.from) && BALLS.includes(ends.to)) {
-    for (const item of found) {
+    for (const item of span.items.filter(isPackage)) {
       yield {
         code: 'package-between-balls',
         section: 'lines',
@@ -44,12 +46,13 @@ function* againstPlanes(
     }
     return
   }
+  if (!isInside(ends.from) && !isInside(ends.to)) return
   const [atFrom, atTo] = sides(span.items, span.items)
   for (const [end, code, there] of [
     ['from', ends.from, atFrom],
     ['to', ends.to, atTo],
   ] as const) {
-    if (code === null || !INSIDE_PACKAGE.includes(code) || there.length > 0) continue
+    if (!isInside(code) || there.length > 0) continue
     yield {
       code: 'no-package-from-bump',
       section: 'allowances',
@@ -62,11 +65,7 @@ function* againstPlanes(
 }
 
 /** The die's pad lies outside the bump. */
-function* dies(
-  items: readonly LineItem[],
-  ends: { readonly from: PlaneCode | null; readonly to: PlaneCode | null },
-  name: string,
-): Generator<FlagDraft> {
+function* dies(items: readonly LineItem[], ends: Ends, name: string): Generator<FlagDraft> {
   if (ends.from === null || ends.to === null || DIES.includes(ends.from) || DIES.includes(ends.to)) return
   for (const { id, line } of items) {
     if (line.kind !== 'die') continue
@@ -79,6 +78,29 @@ function* dies(
       todo: 'Move it outside the planes, or choose a limit that contains the die.',
     }
   }
+}
+
+/** From a die the pad counts, at either end. */
+function* missingDies(items: readonly LineItem[], ends: Ends, id: string, name: string): Generator<FlagDraft> {
+  for (const [end, item] of [
+    ['from', items[0]],
+    ['to', items.at(-1)],
+  ] as const) {
+    const code = ends[end]
+    if (code === null || !DIES.includes(code) || item?.line.kind === 'die') continue
+    yield {
+      code: 'no-die-from-die',
+      section: 'allowances',
+      id,
+      field: end,
+      message: `${name} ${end === 'from' ? 'starts' : 'ends'} at ${code}, and no pad of a die lies at that end.`,
+      todo: 'Add the pad capacitance of the die as a line, or choose the bump as the plane.',
+    }
+  }
+}
+
+function isInside(code: PlaneCode | null): boolean {
+  return code !== null && INSIDE_PACKAGE.includes(code)
 }
 
 /** A package's decibels may lie outside the planes and still be more than the limit presumes. */

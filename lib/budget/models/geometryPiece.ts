@@ -47,13 +47,22 @@ export function dimensionsOf(values: Values): Dimensions {
   }
 }
 
+/** A build whose trace or gap has vanished has no number: formulas would go on, to losses below zero. */
+function possible(structure: Structure, dimensions: Dimensions): Dimensions {
+  const { width, gap, thickness, below, above } = dimensions
+  const needed = [width, thickness, below]
+  if (structure.startsWith('coupled')) needed.push(gap)
+  if (structure.endsWith('stripline')) needed.push(above)
+  return needed.every((size) => size > 0) ? dimensions : { ...dimensions, width: Number.NaN }
+}
+
 /**
  * The pair with these values. Of a 'microstrip' or 'stripline' it is two lines that do not couple: twice the impedance, the
  * same attenuation. A coupon's factor multiplies the attenuation, of the two-port too.
  */
 export function tracePiece(trace: Trace, values: Values): Piece {
   const { structure, surroundings } = trace
-  const dimensions = dimensionsOf(values)
+  const dimensions = possible(structure, dimensionsOf(values))
   const dk = of(values, 'dk') + surroundings.dkAdded
   const df = of(values, 'df') * surroundings.dfFactor + surroundings.dfAdded
   const laminate = widebandDebye(dk, df, trace.anchor)

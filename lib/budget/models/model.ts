@@ -20,6 +20,8 @@ export type ModelInput = {
   readonly hz: number
   /** Ω, differential; null where the budget does not say it. */
   readonly reference: number | null
+  /** Bd; null where the link does not say it. */
+  readonly symbolRate: number | null
   /** Continues 'this is …' where a frequency is a well-known mistake for the Nyquist frequency, else null. */
   readonly mistake: (hz: number) => string | null
 }

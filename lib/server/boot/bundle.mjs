@@ -1,10 +1,14 @@
 import { build } from 'esbuild'
 import { ROOT } from './paths.mjs'
 
-/** One bundle for the process that serves, one for the command line; packages stay where npm put them. */
+/** One bundle for the process that serves, one for the command line, one for the thread that evaluates; packages stay where npm put them. */
 await build({
   absWorkingDir: ROOT,
-  entryPoints: { server: 'lib/server/main.ts', halfbaud: 'lib/server/cli/entry.ts' },
+  entryPoints: {
+    server: 'lib/server/main.ts',
+    halfbaud: 'lib/server/cli/entry.ts',
+    evaluation: 'lib/server/evaluation/worker.ts',
+  },
   outdir: 'dist',
   outExtension: { '.js': '.mjs' },
   bundle: true,

@@ -1,13 +1,16 @@
-import { evaluate } from '../../budget/evaluate'
+import { dirname } from 'node:path'
+import { evaluate, WHOLE } from '../../budget/evaluate'
 import { readJson } from '../../budget/jsonText'
 import { parseBudget } from '../../budget/parse'
 import type { Verdict } from '../../budget/schema'
+import { evidenceBeside } from './evidenceBeside'
 import { type Command, type CommandIo, INVALID } from './io'
 import { readText, UnreadableFile } from './readText'
 
 const STATUS: Readonly<Record<Verdict, number>> = { inside: 0, over: 1, tight: 1, undecided: 2 }
 
 const USAGE = `  evaluate FILE       Prints the evaluation of a budget file as JSON; - reads the standard input.
+                      Evidence files are looked for in the same folder, by their SHA-256.
                       Exit status: 0 inside, 1 over or tight, 2 undecided, 3 invalid.`
 
 /** 'halfbaud evaluate FILE': the evaluation on stdout, complaints on stderr, the verdict as exit status. */
@@ -21,7 +24,7 @@ export const evaluateCommand: Command = {
     }
     const called = file === '-' ? 'standard input' : file
     try {
-      return evaluateText(await readText(file, io.stdin), called, io)
+      return await evaluateText(await readText(file, io.stdin), called, file === '-' ? '.' : dirname(file), io)
     } catch (error) {
       if (!(error instanceof UnreadableFile)) throw error
       io.stderr.write(`${called}: ${error.message}\n`)
@@ -30,7 +33,7 @@ export const evaluateCommand: Command = {
   },
 }
 
-function evaluateText(text: string, called: string, io: CommandIo): number {
+async function evaluateText(text: string, called: string, folder: string, io: CommandIo): Promise<number> {
   const read = readJson(text)
   if ('problem' in read) {
     const { line, column, message } = read.problem
@@ -42,7 +45,7 @@ function evaluateText(text: string, called: string, io: CommandIo): number {
     for (const { message } of parsed.issues) io.stderr.write(`${called}: ${message}\n`)
     return INVALID
   }
-  const evaluation = evaluate(parsed.budget, new Map())
+  const evaluation = evaluate(parsed.budget, await evidenceBeside(parsed.budget, folder), WHOLE)
   io.stdout.write(`${JSON.stringify(evaluation, null, 2)}\n`)
   return STATUS[evaluation.verdict]
 }

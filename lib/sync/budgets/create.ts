@@ -9,7 +9,8 @@ import { seedUpdate } from '../../sheet/seed'
 import type { Door } from '../../sheet/wire'
 import type { Log } from '../clock'
 import type { Committer } from '../committer'
-import { effectsBetween, marginsOf } from '../room/effects'
+import type { Evaluator } from '../evaluator'
+import { effectsBetween } from '../room/effects'
 
 export type Making = {
   readonly journal: Journal
@@ -17,6 +18,7 @@ export type Making = {
   readonly committer: Committer
   readonly now: () => number
   readonly engine: string
+  readonly evaluator: Pick<Evaluator, 'margins'>
   readonly log: Log
 }
 
@@ -85,9 +87,10 @@ function written(committer: Committer, row: Row): Promise<void> {
   })
 }
 
-async function keepEffects({ journal, log }: Making, id: string, budget: Budget): Promise<void> {
+async function keepEffects({ journal, evaluator, log }: Making, id: string, budget: Budget): Promise<void> {
   try {
-    await journal.saveEffects(id, [{ seq: 1, effects: effectsBetween(budget, {}, budget, marginsOf(budget)) }])
+    const margins = await evaluator.margins(budget)
+    await journal.saveEffects(id, [{ seq: 1, effects: effectsBetween(budget, {}, budget, margins) }])
   } catch (cause) {
     log(`The first margins of budget ${id} were not kept`, cause)
   }

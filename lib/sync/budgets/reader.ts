@@ -1,7 +1,8 @@
-import { evaluate } from '../../budget/evaluate'
+import { AT_NYQUIST, WHOLE } from '../../budget/evaluate'
 import type { Evaluation } from '../../budget/evaluation'
 import type { Journal } from '../../records/journal/types'
 import { readBudget } from '../../sheet/seed'
+import type { Evaluator } from '../evaluator'
 import { loadDocument } from '../room/load'
 import type { BudgetState } from '../room/room'
 import type { Locked, Rooms } from '../rooms'
@@ -9,7 +10,8 @@ import type { Locked, Rooms } from '../rooms'
 /** Budgets and evaluations that stay in memory. */
 const REMEMBERED = 200
 
-type Kept = BudgetState & { evaluation: Evaluation | null }
+type Depth = 'verdicts' | 'whole'
+type Kept = BudgetState & { readonly evaluations: Partial<Record<Depth, Promise<Evaluation>>> }
 
 /** Reads budgets and their evaluations as committed; each is computed once for one head. */
 export class Reader {
@@ -18,6 +20,7 @@ export class Reader {
   constructor(
     private readonly journal: Journal,
     private readonly rooms: Rooms,
+    private readonly evaluator: Evaluator,
   ) {}
 
   /** @returns null where the journal does not hold the budget */
@@ -25,11 +28,15 @@ export class Reader {
     return this.find(budget)
   }
 
-  async evaluation(budget: string): Promise<(BudgetState & { evaluation: Evaluation }) | Locked | null> {
+  async evaluation(budget: string, depth: Depth): Promise<(BudgetState & { evaluation: Evaluation }) | Locked | null> {
     const found = await this.find(budget)
     if (found === null || 'locked' in found) return found
-    found.evaluation ??= evaluate(found.budget, new Map())
-    return { ...found, evaluation: found.evaluation }
+    const asked = depth === 'whole' ? WHOLE : AT_NYQUIST
+    found.evaluations[depth] ??= this.evaluator.evaluate(found.budget, asked).catch((cause) => {
+      delete found.evaluations[depth]
+      throw cause
+    })
+    return { ...found, evaluation: await found.evaluations[depth] }
   }
 
   private async find(budget: string): Promise<Kept | Locked | null> {
@@ -52,8 +59,8 @@ export class Reader {
   /** A binding moves the head and changes nothing, so the last edit says whether an evaluation still holds. */
   private keep(budget: string, state: BudgetState): Kept {
     const before = this.kept.get(budget)
-    const evaluation = before?.lastEdit.hash === state.lastEdit.hash ? before.evaluation : null
-    const kept = { ...state, evaluation }
+    const evaluations = before?.lastEdit.hash === state.lastEdit.hash ? before.evaluations : {}
+    const kept = { ...state, evaluations }
     this.kept.delete(budget)
     this.kept.set(budget, kept)
     const [oldest] = this.kept.keys()

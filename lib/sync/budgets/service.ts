@@ -36,7 +36,7 @@ export function createBudgetService(
     },
 
     async evaluation(budget) {
-      const found = await reader.evaluation(budget)
+      const found = await reader.evaluation(budget, 'whole')
       if (found === null || 'locked' in found) return null
       return { evaluation: found.evaluation, seq: found.head.seq }
     },
@@ -55,7 +55,7 @@ async function summary(
   records: Pick<Records, 'people'>,
   reader: Reader,
 ): Promise<BudgetSummary> {
-  const found = await reader.evaluation(record.id)
+  const found = await reader.evaluation(record.id, 'verdicts')
   if (found === null || 'locked' in found) return lockedSummary(record, role, found?.locked ?? MISSING)
   const { budget, evaluation, head, lastEdit } = found
   const person = await records.people.byId(lastEdit.person)

@@ -1,23 +1,12 @@
-import { evaluate } from '../../budget/evaluate'
-import { type MarginSummary, margins } from '../../budget/margins'
+import type { MarginSummary } from '../../budget/margins'
 import type { Budget } from '../../budget/schema'
 import type { Effect } from '../../sheet/wire'
+import type { Margins } from '../evaluator'
 
 /**
- * What an edit did to each allowance's verdict and margin: only those that moved. Derived from two states of the budget and
- * so recomputable at any time (write path, rule 5).
+ * What an edit did to each allowance's verdict and margin: only those that moved. Derived from the margins of two states of the
+ * budget and so recomputable at any time (write path, rule 5).
  */
-export function effectsOf(before: Budget, after: Budget): Effect[] {
-  return effectsBetween(before, marginsOf(before), after, marginsOf(after))
-}
-
-export type Margins = Readonly<Record<string, MarginSummary>>
-
-export function marginsOf(budget: Budget): Margins {
-  return margins(evaluate(budget, new Map()))
-}
-
-/** The same with the margins known, for a run of edits of which each starts where the last one ended. */
 export function effectsBetween(before: Budget, earlier: Margins, after: Budget, later: Margins): Effect[] {
   const allowances = [...new Set([...Object.keys(earlier), ...Object.keys(later)])]
   return allowances

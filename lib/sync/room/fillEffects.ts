@@ -1,7 +1,8 @@
 import type { Budget, Scalar } from '../../budget/schema'
 import type { Entry, Journal } from '../../records/journal/types'
 import type { Change } from '../../sheet/change'
-import { effectsOf } from './effects'
+import type { Evaluator } from '../evaluator'
+import { effectsBetween } from './effects'
 import type { BudgetState } from './room'
 
 /** As many entries as one group of commits may leave without effects when the process ends at once. */
@@ -11,7 +12,12 @@ const LOOKED_AT = 100
  * Effects are found after the commit, so a process that ends in between leaves the last ones out. Finds them from the changes,
  * going back from the present budget.
  */
-export async function fillEffects(journal: Journal, budget: string, present: BudgetState): Promise<void> {
+export async function fillEffects(
+  journal: Journal,
+  evaluator: Pick<Evaluator, 'margins'>,
+  budget: string,
+  present: BudgetState,
+): Promise<void> {
   const { seq: last } = present.head
   const latest = await journal.latest(budget, { before: last + 1, limit: LOOKED_AT })
   const entries = latest.filter(({ kind }) => kind === 'edit')
@@ -21,12 +27,15 @@ export async function fillEffects(journal: Journal, budget: string, present: Bud
   )
   const missing = entries.findLastIndex(({ seq }) => !known.has(seq))
   if (missing < 0) return
-  const found: { seq: number; effects: ReturnType<typeof effectsOf> }[] = []
+  const found: { seq: number; effects: ReturnType<typeof effectsBetween> }[] = []
   let after = present.budget
+  let later = await evaluator.margins(after)
   for (const entry of entries.slice(0, missing + 1)) {
     const before = budgetBefore(after, entry)
-    if (!known.has(entry.seq)) found.push({ seq: entry.seq, effects: effectsOf(before, after) })
+    const earlier = await evaluator.margins(before)
+    if (!known.has(entry.seq)) found.push({ seq: entry.seq, effects: effectsBetween(before, earlier, after, later) })
     after = before
+    later = earlier
   }
   await journal.saveEffects(budget, found)
 }

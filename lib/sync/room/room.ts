@@ -8,6 +8,7 @@ import type { Role } from '../../sheet/wire'
 import type { Cancel, Clock, Log } from '../clock'
 import type { CloseReason } from '../closing'
 import type { Committer } from '../committer'
+import type { Evaluator } from '../evaluator'
 import { Admission } from './admission'
 import { Bindings } from './bindings'
 import { Chain } from './chain'
@@ -31,6 +32,7 @@ export type RoomDeps = {
   readonly clock: Clock
   readonly log: Log
   readonly engine: string
+  readonly evaluator: Pick<Evaluator, 'margins'>
   /** The name in the budget's head is another one now. */
   readonly renamed: (budget: string, name: string | null) => void
   /** The room cannot go on: it is taken out, and loaded anew when somebody comes. */
@@ -63,7 +65,7 @@ export class Room {
     bound: Map<number, string>,
     private readonly deps: RoomDeps,
   ) {
-    const { journal, sessions, committer, clock, log, engine } = deps
+    const { journal, sessions, committer, clock, log, engine, evaluator } = deps
     this.snapshotSeq = loaded.snapshotSeq
     this.peers = new Peers(clock)
     const bindings = new Bindings(bound, (clientId) => Y.getState(loaded.doc.store, clientId) > 0)
@@ -96,7 +98,14 @@ export class Room {
     )
     this.name = this.path.budget.head.name
     this.submissions = new Submissions(budget, this.path, bindings)
-    this.trail = new Trail(budget, this.path.budget, journal, (entries) => this.peers.sendTrail(entries), log)
+    this.trail = new Trail(
+      budget,
+      this.path.budget,
+      journal,
+      (entries) => this.peers.sendTrail(entries),
+      evaluator,
+      log,
+    )
     this.stopPresence = clock.every(PRESENCE_INTERVAL, () => this.tick())
   }
 

@@ -2,7 +2,8 @@ import type { Budget } from '../../budget/schema'
 import type { Entry, Journal } from '../../records/journal/types'
 import type { Effect, TrailEntry } from '../../sheet/wire'
 import type { Log } from '../clock'
-import { effectsBetween, type Margins, marginsOf } from './effects'
+import type { Evaluator, Margins } from '../evaluator'
+import { effectsBetween } from './effects'
 
 /** A committed edit, with the budget that it led to and the name of who made it. */
 export type Committed = { readonly entry: Entry; readonly after: Budget; readonly personName: string }
@@ -25,6 +26,7 @@ export class Trail {
     start: Budget,
     private readonly journal: Pick<Journal, 'saveEffects'>,
     private readonly tell: (entries: TrailEntry[]) => void,
+    private readonly evaluator: Pick<Evaluator, 'margins'>,
     private readonly log: Log,
   ) {
     this.before = start
@@ -55,7 +57,7 @@ export class Trail {
       for (const committed of batch) {
         // One evaluation at a time, so that frames are read in between.
         await new Promise((resolve) => setImmediate(resolve))
-        const effects = this.effectsOf(committed)
+        const effects = await this.effectsOf(committed)
         found.push({
           entry: trailEntry(committed.entry, committed.personName, effects ?? []),
           known: effects !== null,
@@ -71,10 +73,10 @@ export class Trail {
     this.running = null
   }
 
-  private effectsOf({ entry, after }: Committed): Effect[] | null {
+  private async effectsOf({ entry, after }: Committed): Promise<Effect[] | null> {
     try {
-      const earlier = this.margins ?? marginsOf(this.before)
-      const later = marginsOf(after)
+      const earlier = this.margins ?? (await this.evaluator.margins(this.before))
+      const later = await this.evaluator.margins(after)
       const effects = effectsBetween(this.before, earlier, after, later)
       this.margins = later
       return effects

@@ -1,5 +1,6 @@
 import type { Identity } from '../../../lib/access/identity'
 import { ENGINE } from '../../../lib/budget/engine'
+import { evaluatorHere } from '../../../lib/sync/evaluator'
 import { openSync } from '../../../lib/sync/open'
 import type { Services } from '../../../lib/sync/services'
 import { OWNER, ownedWorld, signedIn } from '../../access/world'
@@ -8,11 +9,13 @@ import { PUBLIC_URL, publish } from './caller'
 /** Everything behind the API as the server puts it together, on a directory of its own, and published for the handlers. */
 export async function openWorksheet() {
   const world = await ownedWorld({ publicUrl: PUBLIC_URL })
+  const evaluator = evaluatorHere(new Map())
   const sync = await openSync({
     store: world.store,
     sessions: world.access,
     publicUrl: PUBLIC_URL,
     engine: ENGINE,
+    evaluator,
     clock: world.now,
     log: (message, error) => world.logged.push(`${message}: ${error}`),
   })
@@ -20,6 +23,7 @@ export async function openWorksheet() {
   const services: Services = {
     publicUrl: PUBLIC_URL,
     demo: false,
+    evaluate: evaluator.evaluate,
     engine: ENGINE,
     access: world.access,
     budgets,

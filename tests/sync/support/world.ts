@@ -10,6 +10,7 @@ import { openJournal } from '../../../lib/records/journal/open'
 import type { Journal } from '../../../lib/records/journal/types'
 import type { StoreProblem } from '../../../lib/records/types'
 import type { Timers } from '../../../lib/sync/clock'
+import { evaluatorHere } from '../../../lib/sync/evaluator'
 import { openSync, type Sync } from '../../../lib/sync/open'
 import type { holdableDisk } from './disk'
 import { memoryRecords } from './memoryRecords'
@@ -47,6 +48,7 @@ export async function openWorld(options: WorldOptions = {}) {
       sessions,
       publicUrl: PUBLIC_URL,
       engine: ENGINE,
+      evaluator: evaluatorHere(new Map()),
       clock: options.now ?? Date.now,
       ...(options.timers ? { timers: options.timers } : {}),
       log: (message, error) => logged.push(`${message}${error === undefined ? '' : `: ${error}`}`),

@@ -1,7 +1,9 @@
-import { evaluate } from '../../../../lib/budget/evaluate'
+import { WHOLE } from '../../../../lib/budget/evaluate'
 import { change } from '../../wrapper'
 import { evaluateBudget } from './declaration'
 
 export const dynamic = 'force-dynamic'
 
-export const POST = change(evaluateBudget, ({ body }) => ({ json: evaluate(body, new Map()) }))
+export const POST = change(evaluateBudget, async ({ body, services }) => ({
+  json: await services.evaluate(body, WHOLE),
+}))

@@ -1,0 +1,44 @@
+import type { Context } from '../context'
+import { type Conditions, holdsIn } from '../corner'
+import type { LineItem } from '../lineItem'
+import type { LaneSum } from './laneSums'
+
+/** What a corner did to the lines between the planes of one lane. */
+export type CornerMoves = {
+  /** dB that it moved the sum by. */
+  readonly movedDb: number
+  /** dB of lines that it cannot move although their numbers do not hold there, and which they are. */
+  readonly unmovedDb: number
+  readonly unmoved: readonly LineItem[]
+}
+
+/** @returns null in the reference corner, and where the corner cannot be judged */
+export function movesOf(
+  context: Context,
+  corner: Conditions | null,
+  lane: LaneSum,
+  atHz: number | null,
+): CornerMoves | null {
+  if (corner === null || atHz === null || lane.cornerUnknown !== null) return null
+  let movedDb = 0
+  let unmovedDb = 0
+  const unmoved: LineItem[] = []
+  for (const { item, sign, loss } of lane.lines) {
+    if (sign === 0 || loss.nominal === null) continue
+    const before = context.losses.at(item, atHz, null).nominal ?? loss.nominal
+    movedDb += sign * (loss.nominal - before)
+    if (loss.nominal !== before || !shouldMove(item, corner)) continue
+    unmoved.push(item)
+    unmovedDb += loss.nominal
+  }
+  return { movedDb, unmovedDb, unmoved }
+}
+
+/** A part whose number neither holds in the corner already nor is held back on purpose. */
+function shouldMove({ line, lossClass }: LineItem, corner: Conditions): boolean {
+  if (line.kind === 'reserve' || line.kind === 'overlap') return false
+  const holds = holdsIn(line, lossClass)
+  const warmer = corner.temperature !== null && (holds.temperature ?? corner.reference) !== corner.temperature
+  const wetter = corner.wet && holds.humidity !== 'wet'
+  return warmer || wetter
+}

@@ -1,0 +1,60 @@
+import { fittedLoss } from '../../../channel/fitting'
+import { propagationFromTwoLengths } from '../../../channel/fixtures'
+import { TWO_PORT } from '../../../channel/networks/network'
+import { LENGTH } from '../../quantities'
+import type { ModelInput } from '../model'
+import type { Computed, Piece } from '../piece'
+import { FIT_FROM } from './longUniform'
+import { twoPortOf } from './twoPortOf'
+
+const DB_PER_NEPER = 20 / Math.LN10
+
+/**
+ * Loss per length from two lengths of one line (multiline method): what both have in common, connectors and launches, falls
+ * out. Counts the fitted attenuation times the line's own length.
+ */
+export function perLengthOf(input: ModelInput): Computed | null {
+  const { fields, symbolRate } = input
+  const length = fields.need('length', LENGTH)
+  const difference = fields.need('lengthDifference', LENGTH)
+  const long = twoPortOf(input, 'evidence')
+  const short = twoPortOf(input, 'shortEvidence')
+  if (length === null || difference === null || long === null || short === null) return null
+  const found = propagationFromTwoLengths(long, short, difference)
+  if ('reason' in found) {
+    return fields.say(
+      'not-fitted',
+      'shortEvidence',
+      `${fields.name}: no loss per length comes of its two files.`,
+      found.reason,
+    )
+  }
+  const perMetre = found.alpha.map((nepers) => nepers * DB_PER_NEPER)
+  const fit = fittedLoss(found.hz, perMetre, {
+    form: 'weighted',
+    from: FIT_FROM,
+    to: symbolRate ?? Number.POSITIVE_INFINITY,
+  })
+  if ('reason' in fit) {
+    return fields.say('not-fitted', 'evidence', `${fields.name}: its loss per length cannot be fitted.`, fit.reason)
+  }
+  const build = (metres: number): Piece => {
+    const attenuation = (hz: Float64Array) => hz.map((at) => (fit.at(at) ?? Number.NaN) * metres)
+    return {
+      from: fit.hz[0] ?? 0,
+      to: fit.hz.at(-1) ?? 0,
+      reflects: false,
+      twoPort: (hz) => matched(attenuation(hz)),
+      attenuation,
+      uncertainty: 0,
+    }
+  }
+  return { values: { length }, build: (values) => build(values.length ?? length) }
+}
+
+/** Attenuation without reflection or delay. */
+function matched(db: Float64Array): Float64Array {
+  const s = new Float64Array(TWO_PORT * db.length)
+  for (let k = 0; k < db.length; k++) s[TWO_PORT * k + 2] = s[TWO_PORT * k + 4] = 10 ** (-(db[k] as number) / 20)
+  return s
+}
