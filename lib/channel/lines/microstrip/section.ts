@@ -47,8 +47,8 @@ export function microstripSection(dimensions: Dimensions, dielectric: number): C
  * side walls widen the strip as they do on a single line; close together, the outer wall widens it by half of that and the
  * facing walls are plates (air between them) of 2t/s. Both leave some capacitance out, so the larger is taken. The widening
  * is another one above a dielectric than in air, and counts as in Hammerstad and Jensen's single line. Against boundary
- * elements for u 0.5 to 2, g 0.3 to 8, t/h up to 0.3 and t up to s: impedance 0 to +2.7 %, in air −0.3 to +3.5 %, effective
- * permittivity −0.2 to +1.8 %.
+ * elements for u 0.5 to 2, g 0.3 to 8, t/h up to 0.6 and t up to s: impedance 0 to +2.7 %, in air −0.3 to +3.5 %, effective
+ * permittivity −0.2 to +2.2 %.
  */
 function oddCapacitance({ width, gap, thickness, below }: Dimensions, dielectric: number): number {
   const [u, g] = [width / below, gap / below]

@@ -35,10 +35,9 @@ export function thinCoupledStripline(width: number, gap: number, spacing: number
   const x = (Math.PI * width) / (2 * spacing)
   const y = (Math.PI * (width + gap)) / (2 * spacing)
   const k = mode === 'even' ? Math.tanh(x) * Math.tanh(y) : Math.tanh(x) / Math.tanh(y)
-  // 1 − k² without cancellation: sech²x + tanh²x·sech²y, and in the odd mode (sinh²y − sinh²x)/(sinh²y·cosh²x).
-  const rest =
-    mode === 'even'
-      ? 1 / Math.cosh(x) ** 2 + (Math.tanh(x) / Math.cosh(y)) ** 2
-      : (Math.sinh(y - x) * Math.sinh(y + x)) / (Math.sinh(y) * Math.cosh(x)) ** 2
+  // 1 − k² without the cancellation that a wide strip would bring.
+  const partner = mode === 'even' ? 1 / Math.cosh(y) : 1 / Math.sinh(y)
+  const less = (Math.tanh(x) * partner) ** 2
+  const rest = 1 / Math.cosh(x) ** 2 + (mode === 'even' ? less : -less)
   return byModulus(Math.sqrt(rest), k)
 }

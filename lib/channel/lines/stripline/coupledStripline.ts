@@ -7,8 +7,8 @@ import { centredStripline } from './thickStripline'
  * memory) has the thick single line, then adds what coupling does to the thin pair, weighted by how the edge's fringing
  * capacitance grows with thickness. For a gap narrow against the thickness he has a second form of the odd mode, with the
  * facing walls as plates. Both leave some capacitance out, so the larger one is taken, instead of his change at s/t = 5,
- * which jumps. Far apart, both modes become the single line. Against boundary elements for w/b 0.15 to 1.2, s/b 0.1 to 1.8,
- * t/b 0.02 to 0.2: −1.5 to +2.4 % (odd).
+ * which jumps. Far apart, both modes become the single line. Against boundary elements for w/b 0.08 to 1.2, s/b 0.05 to 1.8,
+ * t/b 0.01 to 0.2: −1.5 to +2.6 % (odd).
  * @param width m
  * @param gap m
  * @param spacing m, plane to plane
