@@ -49,13 +49,13 @@ function analytic(rows: readonly Row[]) {
 describe(`Tamarack in one lane, ${TRIALS} builds with seed ${SEED} (practice.md C1, checked by the normal distribution)`, () => {
   it.each([
     ['at 25 °C: mean 27.20 dB, ±1.09 dB, 98.6 % inside', TABLE, 27.2, 1.09, 0.986],
-    ['hot: 28.19 dB, about 30 % inside', hot, 28.19, 1.13, 0.3],
-    ['with nothing in common: ±0.87 dB', apart, 27.2, 0.87, 0.997],
+    ['hot: 28.19 dB, about 30 % inside', hot, 28.19, null, 0.3],
+    ['with nothing in common: ±0.87 dB', apart, 27.2, 0.87, null],
   ] as const)('%s', (_, rows, printedTotal, printedRss, printedInside) => {
     const { total, sigma, inside } = analytic(rows)
     expect(total).toBeCloseTo(printedTotal, 2)
-    expect(3 * sigma).toBeCloseTo(printedRss, 2)
-    expect(Math.abs(inside - printedInside)).toBeLessThan(0.01)
+    if (printedRss !== null) expect(3 * sigma).toBeCloseTo(printedRss, 2)
+    if (printedInside !== null) expect(inside).toBeCloseTo(printedInside, printedInside > 0.9 ? 3 : 1)
     const builds = draw(rows)
     expect(Math.abs((builds.meanDb ?? 0) - total)).toBeLessThan((4 * sigma) / Math.sqrt(TRIALS))
     const deviation = Math.sqrt((inside * (1 - inside)) / TRIALS)

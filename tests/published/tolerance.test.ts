@@ -9,7 +9,7 @@ import { line, link } from '../budget/links'
 function combined(parts: readonly { readonly sigma: number; readonly group: string }[]) {
   const own = parts.map(({ sigma, group }, n) => [
     `l${n}`,
-    line(`a${n}`, '1 dB', { tolerancePlus: `${sigma} dB`, toleranceMeaning: '1-sigma', group }),
+    line(`b${n}`, '1 dB', { tolerancePlus: `${sigma} dB`, toleranceMeaning: '1-sigma', group }),
   ])
   const [allowance] = evaluate(link({ lines: Object.fromEntries(own) }), new Map()).allowances
   const lines = parts.map(({ sigma, group }, n) =>
@@ -75,7 +75,7 @@ describe('0.5, 0.3, 0.2 and 0.8 dB (physics.md W15, computed there)', () => {
   it('are 1.8 dB at worst, 1.00995 dB as a root of the sum of squares; anywhere within, σ is 0.583095 dB', () => {
     const parts = [0.5, 0.3, 0.2, 0.8]
     const lines = Object.fromEntries(
-      parts.map((t, n) => [`l${n}`, line(`a${n}`, '1 dB', { tolerancePlus: `${t} dB`, group: `g${n}` })]),
+      parts.map((t, n) => [`l${n}`, line(`b${n}`, '1 dB', { tolerancePlus: `${t} dB`, group: `g${n}` })]),
     )
     const [allowance] = evaluate(link({ lines }), new Map()).allowances
     expect(allowance?.worstDb).toBeCloseTo(5.8, 12)
