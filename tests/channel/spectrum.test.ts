@@ -5,7 +5,7 @@ import {
   spectrumOf,
   trapezoidCorners,
   trapezoidHarmonics,
-} from '../../lib/channel/signalling/spectrum'
+} from '../../lib/channel/signalling'
 
 const RATE = 53.125e9
 const at = (...turns: number[]) => Float64Array.from(turns, (turn) => turn * RATE)

@@ -5,7 +5,7 @@ import {
   spectrumOf,
   trapezoidCorners,
   trapezoidHarmonics,
-} from '../../lib/channel/signalling/spectrum'
+} from '../../lib/channel/signalling'
 
 describe('spectra of text books', () => {
   it('D2: of random symbols 0.77370 of the power lies below half the symbol rate, 0.88883, 0.90282, 0.94994 below 0.75, 1 and 2 of it', () => {
