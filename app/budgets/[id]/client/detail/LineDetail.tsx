@@ -2,6 +2,7 @@
 import type { Line } from '../../../../../lib/budget/schema'
 import { DisciplineGlyph } from '../../../../marks/DisciplineGlyph'
 import { KIND_WORD, OWNER_WORD } from '../../../../words/terms'
+import { LineCatalogue } from '../catalogue/LineCatalogue'
 import { FieldSlip } from '../slips/FieldSlip'
 import { fieldSlip, toleranceSlip } from '../slips/spec'
 import { useReading } from '../state/contexts'
@@ -47,6 +48,7 @@ export function LineDetail({ id, line }: { id: string; line: Line }) {
               <FieldSlip key={field} spec={fieldSlip('lines', id, field, line[field])} />
             ))}
           </div>
+          {title === 'How its loss is found' && <LineCatalogue id={id} model={line.model} />}
         </Group>
       ))}
       <Lanes id={id} fields={modelParameters(line.model)} />

@@ -1,5 +1,7 @@
 'use client'
 import type { Allowance } from '../../../../../lib/budget/schema'
+import { AllowanceCatalogue } from '../catalogue/AllowanceCatalogue'
+import { SaveAllowance } from '../catalogue/SaveAllowance'
 import { inOrder } from '../deeds/records'
 import { FieldSlip } from '../slips/FieldSlip'
 import { fieldSlip } from '../slips/spec'
@@ -37,10 +39,14 @@ export function Allowances() {
             <summary>More of this allowance</summary>
             <div className={css.slips}>{MORE.map((field) => slip(id, allowance, field))}</div>
           </details>
+          <SaveAllowance allowance={allowance} />
           <TakeOut section="allowances" id={id} />
         </section>
       ))}
-      <AddRecord section="allowances" fresh={{}} />
+      <div className={css.adding}>
+        <AddRecord section="allowances" fresh={{}} />
+        <AllowanceCatalogue />
+      </div>
       <TakenOut section="allowances" />
     </section>
   )
