@@ -11,7 +11,7 @@ import css from './tables.module.css'
 
 type Field = keyof Allowance & string
 const GROUPS: readonly { readonly title: string; readonly fields: readonly Field[] }[] = [
-  { title: 'Limit', fields: ['name', 'limit', 'at', 'from', 'to', 'requiredMargin'] },
+  { title: 'Limit', fields: ['name', 'limit', 'at', 'usedAt', 'from', 'to', 'requiredMargin'] },
   { title: 'Judged at', fields: ['judgedCorner', 'judgedStatistic', 'judgedLane'] },
   { title: 'Source', fields: ['body', 'clause', 'confidence', 'publishedFrom', 'publishedTo'] },
 ]
