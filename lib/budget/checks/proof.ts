@@ -67,7 +67,7 @@ function* file(item: LineItem, { reference }: Beside, evidence: EvidenceRecord):
 }
 
 function apart(own: number, reference: number): boolean {
-  return Math.abs(own / reference - 1) > APART
+  return Math.abs(own / reference - 1) > APART + 1e-9
 }
 
 function ohms(value: number): string {

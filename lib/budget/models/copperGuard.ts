@@ -4,9 +4,9 @@ import type { FlagCode } from '../flags'
 import { LENGTH, RESISTANCE, typedValue } from '../quantities'
 import type { ModelInput } from './model'
 
-type Owner = {
+type Owner<F extends string> = {
   readonly name: string
-  say(code: FlagCode, field: 'lossPerLength', message: string, todo: string): null
+  say(code: FlagCode, field: F, message: string, todo: string): null
 }
 
 /** A line without an impedance of its own may be one of 100 Ω in a link of 85 Ω: a higher impedance has a lower floor. */
@@ -14,12 +14,18 @@ const OTHER_DESIGN = 1.2
 
 /**
  * Refuses a trace's attenuation that even smooth copper of its width exceeds: no laminate can be better than its copper.
- * @param owner the record that says the attenuation in its field 'lossPerLength'
+ * @param owner the record that says the attenuation, and in which field
  * @param dbPerMetre at the frequency that it is stated at, dB/m
  * @param hz that frequency
  * @returns true after writing down why the number is impossible
  */
-export function refuseImpossible(input: ModelInput, owner: Owner, dbPerMetre: number, hz: number): boolean {
+export function refuseImpossible<F extends string>(
+  input: ModelInput,
+  owner: Owner<F>,
+  field: F,
+  dbPerMetre: number,
+  hz: number,
+): boolean {
   const { line, lossClass, reference } = input
   const width = typedValue(LENGTH, line.width ?? lossClass?.width ?? null)
   const own = typedValue(RESISTANCE, line.impedance)
@@ -31,7 +37,7 @@ export function refuseImpossible(input: ModelInput, owner: Owner, dbPerMetre: nu
   const [typed, least] = [dbPerMetre, floor].map((db) => formatQuantity(db, 'lossPerLength', 'dB/in', 3))
   owner.say(
     'below-copper-floor',
-    'lossPerLength',
+    field,
     `${owner.name}: ${typed} at ${formatScaled(hz, 'frequency')} is impossible; smooth copper of ${formatQuantity(width, 'length', 'mil', 3)} alone loses more than ${least}.`,
     'Check the unit, the frequency and the width.',
   )

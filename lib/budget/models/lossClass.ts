@@ -2,6 +2,7 @@ import { parsePoints } from '../../channel/tables'
 import type { Findings } from '../findings'
 import { FREQUENCY, LENGTH, LOSS_PER_LENGTH, NUMBER } from '../quantities'
 import { atFrequency } from './atFrequency'
+import { refuseImpossible } from './copperGuard'
 import { ownLine } from './knownPiece'
 import type { Model, ModelInput } from './model'
 import { fromPoints } from './table'
@@ -30,7 +31,9 @@ function attenuation(input: ModelInput, fields: Findings<'lossClasses'>, length:
   if (text === null || text.trim() === '') {
     const perLength = fields.need('lossPerLength', LOSS_PER_LENGTH)
     const at = fields.need('at', FREQUENCY)
-    return perLength === null || at === null ? null : atFrequency(input, fields, perLength * (length * scale), at)
+    if (perLength === null || at === null) return null
+    if (refuseImpossible(input, fields, 'lossPerLength', perLength * scale, at)) return null
+    return atFrequency(input, fields, perLength * (length * scale), at)
   }
   const parsed = parsePoints(text, 'lossPerLength')
   if ('reason' in parsed) {

@@ -1,5 +1,7 @@
+import { twoTermAttenuation } from '../../channel/lines'
 import { FREQUENCY, LENGTH, LOSS_PER_LENGTH } from '../quantities'
 import { atFrequency } from './atFrequency'
+import { refuseImpossible } from './copperGuard'
 import { knownPiece, lineOf, ownLine } from './knownPiece'
 import type { Model, ModelInput } from './model'
 import type { Computed } from './piece'
@@ -13,6 +15,7 @@ export const perLength: Model = (input) => {
   const attenuation = fields.need('lossPerLength', LOSS_PER_LENGTH)
   const at = fields.need('at', FREQUENCY)
   if (length === null || attenuation === null || at === null) return null
+  if (refuseImpossible(input, fields, 'lossPerLength', attenuation, at)) return null
   return atFrequency(input, fields, attenuation * length, at)
 }
 
@@ -21,6 +24,9 @@ function twoTerms(input: ModelInput, length: number | null): Computed | null {
   const own = ownLine(input.fields)
   if (length === null || terms === null || own === null) return null
   const { from, to } = terms
+  const { rootTerm = 0, linearTerm = 0 } = terms.values
+  if (refuseImpossible(input, input.fields, 'rootTerm', twoTermAttenuation(rootTerm, linearTerm, input.hz), input.hz))
+    return null
   return {
     values: { length, ...terms.values, ...own },
     build: (values) =>

@@ -16,7 +16,7 @@ describe('mistake 1: a footprint via counted in the connector’s data and again
   const both = 'footprint-via-a footprint-via-b'
 
   it('in the data and as a line: counted twice, once for each side', () => {
-    const parts = channel(`mating-interface ${both}`, 'a', 'b')
+    const parts = channel(`${both} mating-interface`, 'a', 'b')
     expect(flagged('counted-twice', parts)).toEqual(['c covers', 'c covers'])
     expect(flagged('nobody-counts', parts)).toEqual([])
   })
@@ -29,14 +29,14 @@ describe('mistake 1: a footprint via counted in the connector’s data and again
   })
 
   it('in exactly one: no flag', () => {
-    for (const parts of [channel('mating-interface', 'a', 'b'), channel(`mating-interface ${both}`)]) {
+    for (const parts of [channel('mating-interface', 'a', 'b'), channel(`${both} mating-interface`)]) {
       expect(flagged('counted-twice', parts)).toEqual([])
       expect(flagged('nobody-counts', parts)).toEqual([])
     }
   })
 
   it('a line put between two others is judged at both of its joints, and taken out again at the one that is left', () => {
-    const parts = channel(`mating-interface ${both}`)
+    const parts = channel(`${both} mating-interface`)
     const with_ = { lines: { ...parts.lines, v: line('a2', '0.4 dB', { kind: 'via', covers: '' }) } }
     expect(flagged('counted-twice', parts)).toEqual([])
     expect(flagged('counted-twice', with_)).toEqual(['c covers'])
