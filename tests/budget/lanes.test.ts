@@ -35,7 +35,15 @@ describe('lanes', () => {
       'u/3/length': '4 in',
     })
     expect(allowance.lossDb).toBeCloseTo(10.5, 12)
-    expect(allowance.judged).toEqual({ corner: 'reference corner', statistic: 'nominal', lane: 3, lanes: 4 })
+    expect(allowance.judged).toEqual({
+      corner: 'reference corner',
+      statistic: 'nominal',
+      lane: 3,
+      lanes: 4,
+      shortestLane: expect.any(Number),
+      movedDb: null,
+      unmovedDb: null,
+    })
     expect(allowance.lines.map(({ countedDb }) => countedDb)).toEqual([5.5, 4, 1].map((db) => expect.closeTo(db, 12)))
     expect(evaluation.lines.t).toMatchObject({ lane: 2, loss: { nominalDb: expect.closeTo(6, 12) } })
     expect(evaluation.lines.v).toMatchObject({ lane: null, loss: { nominalDb: 1 } })

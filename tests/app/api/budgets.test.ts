@@ -11,7 +11,7 @@ import { GET as readTrail } from '../../../app/api/v1/budgets/[id]/trail/route'
 import { POST as createBudget, GET as listBudgets } from '../../../app/api/v1/budgets/route'
 import { POST as evaluateBudget } from '../../../app/api/v1/evaluate/route'
 import { DELETE as signOut } from '../../../app/api/v1/session/route'
-import { evaluate } from '../../../lib/budget/evaluate'
+import { evaluate, WHOLE } from '../../../lib/budget/evaluate'
 import type { Budget } from '../../../lib/budget/schema'
 import type { TrailEntry } from '../../../lib/sheet/wire'
 import { line, link } from '../../budget/links'
@@ -133,7 +133,7 @@ test('[W9.41] a batch of edits is one entry of the trail, in the name of whoever
   )
   expect(entry?.effects.map(({ allowance }) => allowance)).toContain('limit')
   const { json: evaluated } = await call(readEvaluation, by(owner))
-  expect(evaluated).toEqual({ seq, evaluation: evaluate(now.budget, new Map()) })
+  expect(evaluated).toEqual({ seq, evaluation: evaluate(now.budget, new Map(), WHOLE) })
 })
 
 test('[W9.42] an edit by token comes in by its own door', async () => {
