@@ -18,8 +18,58 @@ const planes = (from: object, to: object) => ({
   planes: { tx: { ...PLANES.tx, ...from }, rx: { ...PLANES.rx, ...to } },
 })
 
-/** For every flag that exists, a budget that raises it, and where it hangs: section, id, field. */
-const RAISED: Readonly<Record<FlagCode, readonly [Partial<BudgetFile>, string, string | null, string | null]>> = {
+/** Flags that need the contents of a file, and the test that raises them. */
+const ELSEWHERE = {
+  'delay-longer-than-length': 'mistakes/d2',
+  'loss-at-low-end': 'mistakes/d2',
+  'rises-after-removal': 'mistakes/d2',
+  'gain-after-removal': 'mistakes/d2',
+  'renormalised-differs': 'mistakes/d5',
+  'port-pairs-doubtful': 'mistakes/d5',
+} as const satisfies Partial<Record<FlagCode, string>>
+
+const file = (rest: object) => ({
+  evidence: { e: { order: 'a0', name: 'part', ports: 2, fixtures: 'none' as const, ...rest } },
+})
+const via = { kind: 'via', boardThickness: '3 mm', usedDepth: '1 mm', stub: '1 mm' } as const
+const perLength = { ...trace, model: 'per-length', length: '3 in' } as const
+const computed = {
+  ...trace,
+  model: 'geometry',
+  structure: 'coupled-stripline',
+  length: '5 in',
+  width: '5 mil',
+  gap: '6 mil',
+  thickness: '0.6 mil',
+  heightBelow: '6 mil',
+  heightAbove: '6 mil',
+  dk: '3.6',
+  df: '0.004',
+  anchor: '10 GHz',
+  method: 'resonator',
+  resin: '55 %',
+  roughness: 'cannonball',
+  roughnessTop: '2 µm',
+  roughnessBottom: '2 µm',
+} as const
+const board = { assemblies: { b: { order: 'a0', name: 'Board' } } }
+const lossClass = (order: string, layer: string, rest: object = {}) => ({
+  order,
+  assembly: 'b',
+  layer,
+  lossPerLength: '1 dB/in',
+  at: '10 GHz',
+  ...rest,
+})
+const ofClass = { ...trace, assembly: 'b', model: 'class', lossClass: 'm', length: '2 in' } as const
+
+/** For every other flag that exists, a budget that raises it, and where it hangs: section, id, field. */
+const RAISED: Readonly<
+  Record<
+    Exclude<FlagCode, keyof typeof ELSEWHERE>,
+    readonly [Partial<BudgetFile>, string, string | null, string | null]
+  >
+> = {
   'signalling-incomplete': [{ head: { ...head, bitRate: null } }, 'head', null, 'bitRate'],
   'signalling-impossible': [{ head: { ...head, codedBits: 2, codedSymbols: 1 } }, 'head', null, 'codedBits'],
   'rate-type-not-said': [{ head: { ...head, rateType: null } }, 'head', null, 'rateType'],
@@ -140,6 +190,96 @@ const RAISED: Readonly<Record<FlagCode, readonly [Partial<BudgetFile>, string, s
     'a',
     'loss',
   ],
+  'below-copper-floor': [
+    a({ ...perLength, width: '5 mil', lossPerLength: '0.1 dB/in' }),
+    'lines',
+    'a',
+    'lossPerLength',
+  ],
+  'per-length-unusual': [a({ ...perLength, lossPerLength: '2000 dB/m' }), 'lines', 'a', 'lossPerLength'],
+  'unit-suspected': [a({ ...perLength, lossPerLength: '0.9 dB/m' }), 'lines', 'a', 'lossPerLength'],
+  'anchor-far': [a({ ...computed, anchor: '1 GHz' }), 'lines', 'a', 'anchor'],
+  'smooth-copper': [a({ ...computed, roughness: 'smooth' }), 'lines', 'a', 'roughness'],
+  'laminate-unproven': [a({ ...computed, method: null }), 'lines', 'a', 'method'],
+  'model-below-coupon': [
+    {
+      ...board,
+      lossClasses: {
+        m: lossClass('a0', 'L3', { width: '5 mil', lossPerLength: '0.8 dB/in', basis: 'simulated' }),
+        c: lossClass('a1', 'L3', { width: '5 mil', basis: 'measured' }),
+      },
+      ...a({ ...ofClass, basis: null }),
+    },
+    'lines',
+    'a',
+    'lossClass',
+  ],
+  'class-of-other-layer': [
+    { ...board, lossClasses: { m: lossClass('a0', 'L3') }, ...a({ ...ofClass, layer: 'L5' }) },
+    'lines',
+    'a',
+    'lossClass',
+  ],
+  'layer-not-in-assembly': [
+    {
+      ...board,
+      layers: { l: { order: 'a0', assembly: 'b', name: 'L3' } },
+      ...a({ ...trace, assembly: 'b', layer: 'L5' }),
+    },
+    'lines',
+    'a',
+    'layer',
+  ],
+  'stub-depth-mismatch': [a(via), 'lines', 'a', 'stub'],
+  'lane-outlier': [
+    { head: { ...head, laneCount: 8 }, ...a({}), laneValues: { 'a/3/loss': '6 dB' } },
+    'lines',
+    'a',
+    'loss',
+  ],
+  'impedance-differs': [a({ ...trace, impedance: '85 Ω' }), 'lines', 'a', 'impedance'],
+  'reference-differs': [
+    { ...a({ evidence: 'e' }), ...file({ modes: 'mixed-as-two-ports', reference: '85 Ω' }) },
+    'lines',
+    'a',
+    'evidence',
+  ],
+  'two-port-not-answered': [{ ...a({ evidence: 'e' }), ...file({}) }, 'lines', 'a', 'evidence'],
+  'single-ended-taken-as-differential': [
+    { ...a({ evidence: 'e' }), ...file({ modes: 'single-ended' }) },
+    'lines',
+    'a',
+    'evidence',
+  ],
+  'fixtures-not-said': [
+    { ...a({ evidence: 'e' }), ...file({ modes: 'mixed-as-two-ports', fixtures: null }) },
+    'lines',
+    'a',
+    'evidence',
+  ],
+  'fixtures-removed-twice': [
+    { ...a({ evidence: 'e', fixture: 'e' }), ...file({ modes: 'mixed-as-two-ports', fixtures: 'removed' }) },
+    'lines',
+    'a',
+    'fixture',
+  ],
+  'fixtures-removed-within-planes': [
+    {
+      ...a({ evidence: 'e' }),
+      ...file({ modes: 'mixed-as-two-ports', fixtures: 'removed' }),
+      ...planes({ code: 'tp1' }, { code: 'board-edge' }),
+    },
+    'lines',
+    'a',
+    'evidence',
+  ],
+  'no-die-from-die': [
+    { ...a({ kind: 'package', covers: '' }), ...planes({ code: 'tx-die' }, {}) },
+    'allowances',
+    'limit',
+    'from',
+  ],
+  'inside-on-guesses': [a({ basis: 'estimate' }, '9 dB'), 'allowances', 'limit', null],
   'allowance-frequency-missing': [judged({ at: null }), 'allowances', 'limit', 'at'],
   'allowance-at-other-frequency': [judged({ at: '11.3 GHz' }), 'allowances', 'limit', 'at'],
   'share-exceeded': [
