@@ -1,3 +1,4 @@
+import { benchBuilds } from './builds.bench'
 import { benchCascade } from './cascade.bench'
 import { benchEvaluate } from './evaluate.bench'
 import { benchTouchstone } from './touchstone.bench'
@@ -8,6 +9,7 @@ const rows = [
   ...(await benchEvaluate()),
   ...(await benchCascade()),
   ...(await benchTouchstone()),
+  ...(await benchBuilds()),
   ...(await benchWritePath()),
 ]
 const width = Math.max(...rows.map((row) => row.what.length))

@@ -54,7 +54,7 @@ describe('the response of a loss to its parameters', () => {
             model,
             names.map((name, n) => varies(name, nominal[n] ?? 0, 0.5)),
           )
-          expect(found.quadratic).toBe(true)
+          expect(found.degree).toBe(2)
           const moved = of(nominal.map((value, n) => value + 0.5 * (at[n] ?? 0)))
           expect(found.change(Float64Array.from(at))).toBeCloseTo(moved - of(nominal), 9)
         },
@@ -84,19 +84,34 @@ describe('the response of a loss to its parameters', () => {
     }
   })
 
-  it('is the model itself where a quadratic is off by more than 0.01 dB and 1 %', () => {
-    const steep = formula({ stub: 1 }, ({ stub = Number.NaN }) => Math.exp(3 * stub) / 100)
-    const found = response(steep, [varies('stub', 1, 1)])
-    expect(found.quadratic).toBe(false)
-    expect(found.change(Float64Array.of(1.2))).toBeCloseTo((Math.exp(6.6) - Math.exp(3)) / 100, 12)
-    const mild = formula({ stub: 1 }, ({ stub = Number.NaN }) => Math.exp(0.3 * stub))
-    expect(response(mild, [varies('stub', 1, 0.3)]).quadratic).toBe(true)
+  it('is a polynomial of higher degree where a quadratic is off by more than 0.01 dB and 1 %', () => {
+    const steep = formula({ stub: 1, dk: 2 }, ({ stub = Number.NaN, dk = Number.NaN }) => Math.exp(2 * stub) / 10 + dk)
+    const exact = (stub: number, dk: number) => (Math.exp(2 * stub) - Math.exp(2)) / 10 + dk - 2
+    const found = response(steep, [varies('stub', 1, 0.6), varies('dk', 2, 0.1)])
+    expect(found.degree).toBeGreaterThan(2)
+    for (const [x, y] of [
+      [-1, 1],
+      [0.3, 0.5],
+      [1.4, -0.2],
+    ] as const) {
+      const db = exact(1 + 0.6 * x, 2 + 0.1 * y)
+      expect(Math.abs(found.change(Float64Array.of(x, y)) - db)).toBeLessThan(Math.max(0.01, 0.01 * (db + 2.7)))
+    }
+    // Past 1.5 tolerances no polynomial is asked.
+    expect(found.change(Float64Array.of(1.6, 0))).toBeCloseTo(exact(1.96, 2), 12)
+  })
+
+  it('is the model itself where no polynomial follows it', () => {
+    const kinked = formula({ stub: 1 }, ({ stub = Number.NaN }) => 1 + 5 * Math.abs(stub - 1.1))
+    const found = response(kinked, [varies('stub', 1, 0.9)])
+    expect(found.degree).toBeNull()
+    expect(found.change(Float64Array.of(0.5))).toBeCloseTo(5 * 0.35 - 0.5, 12)
   })
 
   it('takes its differences on one side where nominal is at the end of what can be', () => {
     const square = formula({ stub: 0 }, ({ stub = Number.NaN }) => (stub < 0 ? Number.NaN : 1 + 2 * stub + stub * stub))
     const found = response(square, [varies('stub', 0, 0.3)])
-    expect(found.quadratic).toBe(true)
+    expect(found.degree).toBe(2)
     expect(found.change(Float64Array.of(0.5))).toBeCloseTo(2 * 0.15 + 0.15 ** 2, 12)
   })
 
@@ -147,11 +162,15 @@ describe(`builds with varied parameters, seed ${SEED}`, () => {
     expect99(draw([varying('a', of, { group: 'lot', lanes })], null, 2), 4 + AT_99 * 0.12)
   })
 
-  it('a steep one goes through the model: percentiles are those of the parameter', () => {
+  it('a steep one goes through its polynomial, a kinked one through the model: percentiles are those of the parameter', () => {
     const steep = formula({ stub: 1 }, ({ stub = Number.NaN }) => Math.exp(2 * stub))
     const of = response(steep, [varies('stub', 1, 0.9)])
-    expect(of.quadratic).toBe(false)
+    expect(of.degree).toBeGreaterThan(2)
     expect99(draw([varying('a', of)]), 2 + Math.exp(2 * (1 + 0.3 * AT_99)) - Math.exp(2))
+    const kinked = formula({ stub: 1 }, ({ stub = Number.NaN }) => (stub < 1 ? 1 : 1 + 5 * (stub - 1)))
+    const model = response(kinked, [varies('stub', 1, 0.9)])
+    expect(model.degree).toBeNull()
+    expect99(draw([varying('a', model)]), 2 + 5 * 0.3 * AT_99)
   })
 
   it('a stub is never shorter than nothing: as many builds have none as the distribution has below', () => {
