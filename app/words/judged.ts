@@ -1,6 +1,6 @@
 import type { AllowanceEvaluation } from '../../lib/budget/evaluation'
 import type { Budget } from '../../lib/budget/schema'
-import { decibels, plainDecibels } from './decibels'
+import { decibels, plainDecibels, signedDecibels } from './decibels'
 import { STATISTIC_WORD } from './terms'
 
 type Judged = Pick<AllowanceEvaluation, 'id' | 'judged'>
@@ -29,6 +29,14 @@ export function judgedWords(allowance: Judged, budget: Budget): string {
     laneWords(allowance, budget),
   ]
   return parts.filter(Boolean).join(' · ')
+}
+
+/** What the judged corner did to the sum, and what of it no corner can move; empty in the reference corner. */
+export function movedWords({ judged }: Judged): string {
+  const { movedDb, unmovedDb } = judged
+  if (movedDb === null) return ''
+  const moved = `the corner moves ${signedDecibels(movedDb)} dB`
+  return unmovedDb === null || unmovedDb === 0 ? moved : `${moved}; ${decibels(unmovedDb)} dB cannot be moved`
 }
 
 export type Headline = { readonly figure: string; readonly unit: string; readonly sentence: string }

@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest'
+import { besideWords } from '../../app/words/beside'
 import { counted } from '../../app/words/count'
 import { decibels, frequencyWords, plainDecibels, signedDecibels } from '../../app/words/decibels'
-import { cornerWords, headline, judgedWords } from '../../app/words/judged'
+import { cornerWords, headline, judgedWords, movedWords } from '../../app/words/judged'
 import { planeWords } from '../../app/words/terms'
 import { tamarack, upstream } from './diagram/links'
 
@@ -47,6 +48,24 @@ describe('words', () => {
       unmovedDb: null,
     } as const
     expect(cornerWords({ id: 'x', judged }, { ...tamarack.budget, head })).toBe('25 °C')
+  })
+
+  it('of what a corner moves, and of what it cannot; none in the reference corner', () => {
+    const [room] = tamarack.evaluation.allowances
+    if (!room) throw new Error('tamarack has an allowance')
+    const moved = (movedDb: number | null, unmovedDb: number | null) =>
+      movedWords({ ...room, judged: { ...room.judged, movedDb, unmovedDb } })
+    expect(moved(0.99, 5.4)).toBe('the corner moves +0.99 dB; 5.40 dB cannot be moved')
+    expect(moved(-0.2, 0)).toBe('the corner moves −0.20 dB')
+    expect(moved(null, null)).toBe('')
+  })
+
+  it('of what stands beside a loss: a mismatch has its sign', () => {
+    expect(besideWords({ by: 'computed', beside: [{ what: 'mismatch', db: -0.03 }] })).toEqual([
+      { term: 'found', value: 'computed' },
+      { term: "by mismatch in the link's reference", value: '−0.03 dB' },
+    ])
+    expect(besideWords({ by: null, beside: [] })).toEqual([])
   })
 
   it('of the headline: a margin, or what is left and for how many lines', () => {

@@ -1,8 +1,11 @@
 import { describe, expect, it } from 'vitest'
+import { lineGroups } from '../../../app/budgets/[id]/client/detail/lineGroups'
 import { judgeTyped } from '../../../app/budgets/[id]/client/typed/judge'
-import { modelParameters, modelSlips } from '../../../app/budgets/[id]/client/typed/modelSlips'
+import { canVary, modelParameters } from '../../../app/budgets/[id]/client/typed/modelParameters'
+import { modelSlips } from '../../../app/budgets/[id]/client/typed/modelSlips'
 import { readTolerance, showTolerance } from '../../../app/budgets/[id]/client/typed/tolerance'
-import { type Line, MODELS } from '../../../lib/budget/schema'
+import { laneFieldsNotRead } from '../../../lib/budget/models'
+import { LANE_FIELDS, type Line, MODELS } from '../../../lib/budget/schema'
 import { emptyRecord, fieldsOf } from '../../../lib/sheet/layout'
 
 describe('a value as typed', () => {
@@ -75,15 +78,59 @@ describe('a tolerance in one cell', () => {
 
 describe('the slips of a model', () => {
   const line = (values: Partial<Line>) => ({ ...emptyRecord('lines'), order: 'a0', ...values }) as Line
+  const choices: readonly Partial<Line>[] = [
+    {},
+    { rootTerm: '0.1 dB/in', linearTerm: '0.02 dB/in' },
+    { squareTerm: '0.001 dB/m' },
+    { structure: 'microstrip', roughness: 'smooth' },
+    { structure: 'coupled-stripline', roughness: 'huray' },
+    { roughness: 'cannonball' },
+    { taken: 'per-length' },
+    { taken: 'discrete' },
+  ]
+  const each = MODELS.flatMap((model) => choices.map((choice) => line({ model, ...choice })))
   it('every model has slips, and they are among its parameters', () => {
-    for (const model of MODELS) {
-      const slips = modelSlips(line({ model }))
-      expect(slips.length, model).toBeGreaterThan(0)
-      for (const { field } of slips) expect(modelParameters(model), `${model} ${field}`).toContain(field)
+    for (const one of each) {
+      expect(modelSlips(one).length, one.model ?? '').toBeGreaterThan(0)
+      for (const { field } of modelSlips(one)) expect(modelParameters(one), `${one.model} ${field}`).toContain(field)
     }
   })
-  it('only fields of the schema', () => {
-    for (const model of MODELS) expect(fieldsOf('lines')).toEqual(expect.arrayContaining([...modelParameters(model)]))
+  it('only fields of the schema, each once, and once in the whole detail', () => {
+    for (const one of each) {
+      expect(fieldsOf('lines')).toEqual(expect.arrayContaining([...modelParameters(one)]))
+      const shown = lineGroups(one).flatMap(({ fields }) => fields)
+      expect(new Set(shown).size, one.model ?? '').toBe(shown.length)
+    }
+  })
+  it('what may differ from lane to lane and the model reads can be typed', () => {
+    for (const one of each) {
+      const read = LANE_FIELDS.filter((field) => !laneFieldsNotRead(one).includes(field))
+      expect(modelParameters(one), one.model ?? '').toEqual(expect.arrayContaining(read))
+    }
+  })
+  it('what a choice rules out is not offered', () => {
+    const geometry = (choice: Partial<Line>) => modelParameters(line({ model: 'geometry', ...choice }))
+    expect(geometry({ structure: 'microstrip' })).not.toContain('gap')
+    expect(geometry({ structure: 'microstrip' })).not.toContain('heightAbove')
+    expect(geometry({ structure: 'coupled-stripline' })).toEqual(expect.arrayContaining(['gap', 'heightAbove']))
+    expect(geometry({ roughness: 'huray' })).toEqual(expect.arrayContaining(['areaRatio', 'nodules']))
+    expect(geometry({ roughness: 'cannonball' })).not.toContain('nodules')
+    const network = (taken: Line['taken']) => modelParameters(line({ model: 'network', taken }))
+    expect(network('per-length')).toEqual(expect.arrayContaining(['shortEvidence', 'lengthDifference']))
+    expect(network('discrete')).not.toContain('shortEvidence')
+  })
+  it('terms and a number at a frequency exclude each other, and either can be begun', () => {
+    const perLength = (rootTerm: string | null) => modelParameters(line({ model: 'per-length', rootTerm }))
+    expect(perLength(null)).toEqual(expect.arrayContaining(['lossPerLength', 'at', 'rootTerm', 'linearTerm']))
+    expect(perLength('0.1 dB/in')).toEqual(expect.arrayContaining(['validFrom', 'validTo']))
+    expect(perLength('0.1 dB/in')).not.toContain('lossPerLength')
+  })
+  it('what varies is asked of a model that computes, and kept in sight where it was typed', () => {
+    const varies = (values: Partial<Line>) => lineGroups(line(values)).some(({ fields }) => fields.includes('varies'))
+    expect(canVary(line({ model: 'via' }))).toBe(true)
+    expect(varies({ model: 'via' })).toBe(true)
+    expect(varies({ model: 'stated' })).toBe(false)
+    expect(varies({ model: 'stated', varies: 'width 10 %' })).toBe(true)
   })
   it('an overlap names its two lines, a reserve its purpose', () => {
     expect(modelSlips(line({ kind: 'overlap' })).map(({ field }) => field)).toContain('overlapB')

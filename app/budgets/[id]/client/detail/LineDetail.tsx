@@ -6,7 +6,8 @@ import { LineCatalogue } from '../catalogue/LineCatalogue'
 import { FieldSlip } from '../slips/FieldSlip'
 import { fieldSlip, toleranceSlip } from '../slips/spec'
 import { useReading } from '../state/contexts'
-import { modelParameters } from '../typed/modelSlips'
+import { modelParameters } from '../typed/modelParameters'
+import { Beside } from './Beside'
 import { Covers } from './Covers'
 import css from './detail.module.css'
 import { FlagList } from './FlagList'
@@ -38,6 +39,7 @@ export function LineDetail({ id, line }: { id: string; line: Line }) {
         </div>
         <LineFigure id={id} />
       </div>
+      <Beside id={id} />
       {line.removed && <p className={css.gone}>This line is taken out of the budget.</p>}
       <FlagList section="lines" id={id} />
       {lineGroups(line).map(({ title, fields }) => (
@@ -51,7 +53,7 @@ export function LineDetail({ id, line }: { id: string; line: Line }) {
           {title === 'How its loss is found' && <LineCatalogue id={id} model={line.model} />}
         </Group>
       ))}
-      <Lanes id={id} fields={modelParameters(line.model)} />
+      <Lanes id={id} fields={modelParameters(line)} />
       <Covers id={id} line={line} />
       <Group title="Note">
         <FieldSlip spec={fieldSlip('lines', id, 'note', line.note)} hideLabel of={line.name ?? 'the line'} />

@@ -3,7 +3,7 @@ import type { AllowanceEvaluation } from '../../../../../lib/budget/evaluation'
 import { VerdictMark } from '../../../../marks/VerdictMark'
 import colour from '../../../../marks/verdictColour.module.css'
 import { decibels, frequencyWords } from '../../../../words/decibels'
-import { headline, judgedWords } from '../../../../words/judged'
+import { headline, judgedWords, movedWords } from '../../../../words/judged'
 import { planeWords } from '../../../../words/terms'
 import { useLook, useReading } from '../state/contexts'
 import css from './head.module.css'
@@ -25,6 +25,7 @@ function Headline({ allowance }: { allowance: AllowanceEvaluation }) {
   const { budget } = useReading()
   const { figure, unit, sentence } = headline(allowance)
   const { verdict } = allowance
+  const moved = movedWords(allowance)
   // The words name the first reasons themselves.
   const reasons = allowance.reasons.filter((reason) => !allowance.words.includes(reason))
   return (
@@ -35,6 +36,7 @@ function Headline({ allowance }: { allowance: AllowanceEvaluation }) {
         <span className={`${css.marginUnit} ${colour[verdict]}`}>{unit}</span>
       </p>
       <p className={css.strong}>{judgedWords(allowance, budget)}</p>
+      {moved !== '' && <p className={css.quiet}>{moved}</p>}
       <p className={css.quiet}>{[allowance.name, sentence, span(allowance, budget)].filter(Boolean).join(' · ')}</p>
       {allowance.words !== verdict && <p className={css.strong}>{allowance.words}</p>}
       {reasons.length > 0 && (

@@ -8,6 +8,7 @@ import { LinkWords } from './LinkWords'
 import { signallingFacts, signallingLine } from './signallingFacts'
 
 const ALWAYS = ['bitRate', 'rateType', 'code', 'reference', 'laneCount', 'referenceTemperature'] as const
+const SHAPES = ['edgeTime', 'seed'] as const
 const CODING = ['codedBits', 'codedSymbols', 'codingBits', 'codingLineBits', 'fecMessage', 'fecCodeword'] as const
 
 /** The link and its signalling as slips, and what follows from them. Folded at first where the rate is known. */
@@ -25,6 +26,10 @@ export function Signalling() {
       </summary>
       <LinkWords />
       <div className={css.slips}>{slips(ALWAYS)}</div>
+      <fieldset className={css.coding}>
+        <legend>Spectrum and random builds</legend>
+        <div className={css.slips}>{slips(SHAPES)}</div>
+      </fieldset>
       <fieldset className={css.coding}>
         <legend>Coding and FEC</legend>
         <div className={css.slips}>{slips(CODING)}</div>

@@ -37,7 +37,17 @@ export function Tables() {
       <RecordTable
         section="corners"
         title="Corners"
-        columns={['name', 'temperature', 'humidity', 'fabrication', 'lossPerKelvin', 'lossWet']}
+        columns={[
+          'name',
+          'temperature',
+          'humidity',
+          'fabrication',
+          'lossPerKelvin',
+          'dielectricPerKelvin',
+          'lossWet',
+          'wetDk',
+          'wetDf',
+        ]}
       />
       <RecordTable
         section="shares"
