@@ -3,6 +3,7 @@ import type { Builds } from './builds'
 import type { FlagDraft, Severity } from './flags'
 import type { Beside } from './models/piece'
 import type { Basis, Grade, Owner, Statistic, Verdict } from './schema'
+import type { Sensitivity } from './sensitivity'
 
 /** What evaluate() returns. Losses are positive decibels; null means unknown, never zero. */
 export type Evaluation = {
@@ -96,6 +97,8 @@ export type AllowanceEvaluation = {
   readonly channel: ChannelEvaluation | null
   /** Random builds; null where they were not asked for or a line has no number. */
   readonly builds: Builds | null
+  /** Decibels per tolerance of each input, the largest first; null where they were not asked for. */
+  readonly sensitivity: readonly Sensitivity[] | null
   readonly byBasis: Readonly<Record<Basis | 'unsaid', number>>
   /** Lines between the planes in channel order, with what each counts here. */
   readonly lines: readonly CountedLine[]
@@ -119,10 +122,13 @@ export type ChannelEvaluation = {
   readonly fit: readonly number[] | null
   /** Insertion loss less its fit; null where a line between the planes has no reflection data. */
   readonly deviation: { readonly rmsDb: number; readonly maxDb: number; readonly rippleDb: number } | null
-  /** The lesser of both ends. */
+  /** The lesser of both ends, up to the Nyquist frequency. */
   readonly returnLoss: {
+    /** False: the data do not reach from 0.05 GHz to the Nyquist frequency, so that what is not missed is unknown. */
+    readonly whole: boolean
     readonly atNyquistDb: number | null
-    readonly worstDb: number
+    /** Null: nothing comes back. */
+    readonly worstDb: number | null
     readonly worstAtHz: number
   } | null
   readonly curve: CurveEvaluation | null

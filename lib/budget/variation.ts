@@ -1,4 +1,4 @@
-import { parameterSpread, type Response, responseOf, variedOf } from './builds'
+import { parameterSpread, type Varied, variedOf } from './builds'
 import type { Findings } from './findings'
 import type { LineItem } from './lineItem'
 import type { Computed, Piece } from './models/piece'
@@ -7,10 +7,12 @@ import { both, type Spread, spreadOf, type ToleranceDb, toleranceDb, toleranceOf
 /** What random builds vary: the tolerance in dB, what moving in frequency added, and parameters inside the model. */
 export type Random = ToleranceDb & {
   readonly spreadDb: number
-  readonly response: { readonly of: Response; readonly times: number } | null
+  readonly varied: readonly Varied[]
+  /** By what the corner multiplies what the model says. */
+  readonly times: number
 }
 
-export const NOT_RANDOM: Random = { minusDb: 0, plusDb: 0, meaning: 'limit', spreadDb: 0, response: null }
+export const NOT_RANDOM: Random = { minusDb: 0, plusDb: 0, meaning: 'limit', spreadDb: 0, varied: [], times: 1 }
 
 type Found = {
   readonly db: number
@@ -38,18 +40,16 @@ export function variationOf(
     return null
   }
   const spread = spreadOf(stated, spreadDb)
-  const random: Random = { ...stated, spreadDb, response: null }
-  if (item.line.varies === null) return { spread, random }
+  const random: Random = { ...stated, spreadDb, varied: [], times: db === 0 ? 1 : grown / db }
   if (computed === null || reference === null) {
-    sayVariesUnused(fields)
+    if (item.line.varies !== null) sayVariesUnused(fields)
     return { spread, random }
   }
   const varied = variedOf(fields, computed)
   if (varied === null) return null
   if (varied.length === 0) return { spread, random }
   const parameters = parameterSpread(computed, varied, hz, reference)
-  const of = responseOf(computed, varied, hz, reference)
-  if (parameters === null || of === null) {
+  if (parameters === null) {
     return fields.say(
       'varies-beyond-model',
       'varies',
@@ -57,8 +57,7 @@ export function variationOf(
       'Type smaller limits, or state a tolerance in dB.',
     )
   }
-  const times = db === 0 ? 1 : grown / db
-  return { spread: both(spread, scaled(parameters, times)), random: { ...random, response: { of, times } } }
+  return { spread: both(spread, scaled(parameters, random.times)), random: { ...random, varied } }
 }
 
 function scaled(spread: Spread, times: number): Spread {

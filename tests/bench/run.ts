@@ -1,12 +1,14 @@
 import { benchBuilds } from './builds.bench'
 import { benchCascade } from './cascade.bench'
 import { benchEvaluate } from './evaluate.bench'
+import { benchSweep } from './sweep.bench'
 import { benchTouchstone } from './touchstone.bench'
 import { benchWritePath } from './writePath.bench'
 
 /** One run, one table: each figure beside its baseline, measured in this same process. Nothing is asserted. */
 const rows = [
   ...(await benchEvaluate()),
+  ...(await benchSweep()),
   ...(await benchCascade()),
   ...(await benchTouchstone()),
   ...(await benchBuilds()),

@@ -16,7 +16,9 @@ export const channelEvaluation = z.strictObject({
   fittedDb: known,
   fit: z.array(z.number()).nullable(),
   deviation: z.strictObject({ rmsDb: decibels, maxDb: decibels, rippleDb: decibels }).nullable(),
-  returnLoss: z.strictObject({ atNyquistDb: known, worstDb: decibels, worstAtHz: z.number() }).nullable(),
+  returnLoss: z
+    .strictObject({ whole: z.boolean(), atNyquistDb: known, worstDb: known, worstAtHz: z.number() })
+    .nullable(),
   curve: z
     .strictObject({
       whole: z.boolean(),
@@ -55,3 +57,7 @@ export const buildsEvaluation = z.strictObject({
   independent: ids,
   unknown: z.number().int(),
 })
+
+export const sensitivity = z.array(
+  z.strictObject({ line: z.string(), input: z.string(), perUnit: z.number(), toleranceDb: decibels }),
+)

@@ -2,7 +2,7 @@ import { z } from 'zod'
 import type { Evaluation } from '../../../lib/budget/evaluation'
 import { FLAGS, type FlagCode } from '../../../lib/budget/flags'
 import { BASES, GRADES, OWNERS, STATISTICS, VERDICTS } from '../../../lib/budget/schema'
-import { buildsEvaluation, channelEvaluation } from './channel'
+import { buildsEvaluation, channelEvaluation, sensitivity } from './channel'
 import { component } from './components'
 import { sections } from './sections'
 
@@ -59,6 +59,7 @@ const allowanceEvaluation = z.strictObject({
   rssDb: known,
   channel: channelEvaluation.nullable(),
   builds: buildsEvaluation.nullable(),
+  sensitivity: sensitivity.nullable(),
   byBasis: z.record(z.enum([...BASES, 'unsaid']), decibels),
   lines: z.array(z.strictObject({ id: z.string(), countedDb: known, lowDb: known, highDb: known })),
   shares: z.array(

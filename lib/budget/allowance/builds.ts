@@ -1,4 +1,4 @@
-import { type BuildLine, type Builds, drawBuilds, type Variation } from '../builds'
+import { type BuildLine, type Builds, drawBuilds, responseOf, type Variation } from '../builds'
 import type { Context } from '../context'
 import { groupOf, type LineItem } from '../lineItem'
 import type { LineLoss } from '../lineLoss'
@@ -24,16 +24,13 @@ export function buildsOf(
   const { asked, lanes, budget } = context
   const { atHz } = limit
   if (asked.builds === 0 || atHz === null || lane.cornerUnknown !== null || conditions.problem !== null) return null
+  const variationIn = (one: LineItem) =>
+    variationOf(context.losses.at(one, atHz, conditions.corner), atHz, context.losses.reference)
   const lines: BuildLine[] = []
   for (const { item, sign } of lane.lines) {
     if (sign === 0) continue
     const own = context.items.find(({ id }) => id === item.id) ?? item
-    const line = buildLine(
-      own,
-      sign,
-      (one) => context.losses.at(one, atHz, conditions.corner),
-      lanes.differing.get(item.id),
-    )
+    const line = buildLine(own, sign, variationIn, lanes.differing.get(item.id))
     if (line === null) return null
     lines.push(line)
   }
@@ -50,13 +47,13 @@ export function buildsOf(
 function buildLine(
   own: LineItem,
   sign: 1 | -1,
-  lossOf: (item: LineItem) => LineLoss,
+  variationIn: (item: LineItem) => Variation | null,
   differing: ReadonlyMap<number, LineItem> | undefined,
 ): BuildLine | null {
-  const variation = variationOf(lossOf(own))
+  const variation = variationIn(own)
   const lanes = new Map<number, Variation>()
   for (const [lane, item] of differing ?? []) {
-    const inLane = variationOf(lossOf(item))
+    const inLane = variationIn(item)
     if (inLane === null) return null
     lanes.set(lane, inLane)
   }
@@ -65,6 +62,11 @@ function buildLine(
   return common && { ...common, id: own.id, group: groupOf(own), sign, lanes }
 }
 
-function variationOf({ nominal, random }: LineLoss): Variation | null {
-  return nominal === null ? null : { nominalDb: nominal, ...random, response: random.response }
+function variationOf({ nominal, random, computed }: LineLoss, hz: number, reference: number | null): Variation | null {
+  if (nominal === null) return null
+  const { minusDb, plusDb, meaning, spreadDb, varied, times } = random
+  const plain = { nominalDb: nominal, minusDb, plusDb, meaning, spreadDb, response: null }
+  if (varied.length === 0 || computed === null || reference === null) return plain
+  const of = responseOf(computed, varied, hz, reference)
+  return of && { ...plain, response: { of, times } }
 }

@@ -12,6 +12,7 @@ import { type CornerMoves, movesOf } from './cornerMoves'
 import { type LaneSum, laneSums } from './laneSums'
 import { type Limit, limitOf } from './limit'
 import { type OverFrequency, overFrequency } from './overFrequency'
+import { sensitivityOf } from './sensitivity'
 import { sharesOf } from './shares'
 import { type Span, spanOf } from './span'
 import { type Counted, countedLine, judgedHigh, judgedLow } from './sum'
@@ -166,6 +167,7 @@ function evaluationOf(context: Context, id: string, allowance: Allowance, parts:
     rssDb: whole ? sum.rssUp : null,
     channel: swept.channel,
     builds: buildsOf(context, parts.limit, conditions, lane, comparable),
+    sensitivity: sensitivityOf(context, lane, atHz),
     byBasis: byBasis(lane.lines),
     lines: lane.lines.map(countedLine),
     shares: sharesOf(context.budget, id, lane.lines),

@@ -28,11 +28,11 @@ export type Limit = {
 export function limitOf(allowance: Allowance, nyquist: number | null): Limit {
   const remarks: Limit['remarks'][number][] = []
   const curve = curveOf(allowance, remarks)
-  const own = typedValue(FREQUENCY, allowance.at)
+  const own = typedValue(FREQUENCY, allowance.at) ?? nyquist
   const used = typedValue(FREQUENCY, allowance.usedAt)
   const db = typedValue(LOSS, allowance.limit)
   if (used === null || own === null || db === null || holdsAt(own, used)) {
-    return { db, atHz: used ?? own ?? nyquist, curve, blocked: null, remarks }
+    return { db, atHz: used ?? own, curve, blocked: null, remarks }
   }
   const [from, to] = [formatScaled(own, 'frequency'), formatScaled(used, 'frequency')]
   const moved = movedLimit(db, own, curve, used)

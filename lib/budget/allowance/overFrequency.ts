@@ -19,6 +19,9 @@ export type OverFrequency = {
   readonly unknown: readonly string[]
 }
 
+/** Decibels that are equal on paper may differ by some 1e-14. */
+const EXACT = 1e-9
+
 /**
  * Joins the two-ports of the deciding lane, and judges curve and floor in it and in the lane with the least loss: a long lane
  * misses a loss curve first, a short one a return-loss floor.
@@ -38,9 +41,10 @@ export function overFrequency(
     return { channel: null, missed: [], unknown: [] }
   }
   const lanes = lane === shortest || (!asksCurve && !asksFloor) ? [lane] : [lane, shortest]
-  const swept = lanes.map(({ number, lines }) => ({
+  const swept = lanes.map(({ number, lines, cornerUnknown }) => ({
     where: lanes.length === 1 ? '' : ` in lane ${number}`,
-    channel: channelOf(context, { lines, corner: conditions.corner, atHz, curve }),
+    // Where the corner cannot be judged the lines are those of the reference corner.
+    channel: channelOf(context, { lines, corner: cornerUnknown === null ? conditions.corner : null, atHz, curve }),
   }))
   const missed = new Set<string>()
   const unknown = new Set<string>()
@@ -52,8 +56,10 @@ export function overFrequency(
     }
     if (!asksFloor) continue
     const floor = typedValue(LOSS, allowance.returnLossFloor)
-    if (floor === null || !channel?.returnLoss) unknown.add('return loss')
-    else if (channel.returnLoss.worstDb < floor) missed.add(floorWords(channel.returnLoss, floor, where))
+    const { worstDb = null, worstAtHz = 0, whole = false } = channel?.returnLoss ?? {}
+    if (floor !== null && worstDb !== null && worstDb < floor - EXACT)
+      missed.add(floorWords(worstDb, worstAtHz, floor, where))
+    else if (floor === null || !whole) unknown.add('return loss')
   }
   return { channel: swept[0]?.channel ?? null, missed: [...missed], unknown: [...unknown] }
 }
@@ -65,10 +71,6 @@ function curveWords({ worstDb, worstAtHz, fromHz, toHz }: Miss, where: string): 
   return `limit curve missed by ${plainDb(worstDb)} dB at ${at} (${from} to ${to})${where}`
 }
 
-function floorWords(
-  { worstDb, worstAtHz }: NonNullable<ChannelEvaluation['returnLoss']>,
-  floor: number,
-  where: string,
-): string {
+function floorWords(worstDb: number, worstAtHz: number, floor: number, where: string): string {
   return `return loss ${plainDb(worstDb)} dB at ${formatScaled(worstAtHz, 'frequency')} where ${plainDb(floor)} dB are asked for${where}`
 }

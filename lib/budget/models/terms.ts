@@ -39,5 +39,9 @@ export function termsLoss(values: Values, surroundings: Surroundings): (hz: Floa
   const { temperature, dfFactor } = surroundings
   const warm = Math.sqrt(copperConductivity(COPPER_STATED_AT) / copperConductivity(temperature))
   const terms: CableTerms = { root: rootTerm * warm, linear: linearTerm * dfFactor, square: squareTerm }
-  return (hz) => bulkAttenuation(terms, hz).map((db) => db * length)
+  return (hz) => {
+    const db = bulkAttenuation(terms, hz)
+    for (let i = 0; i < db.length; i++) db[i] = (db[i] as number) * length
+    return db
+  }
 }

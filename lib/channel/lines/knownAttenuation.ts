@@ -39,9 +39,15 @@ export function knownLineTwoPort(
   hz: Float64Array,
   reference: number,
 ): Float64Array {
-  const zRe = new Float64Array(hz.length).fill(impedance)
+  const count = hz.length
+  const zRe = new Float64Array(count).fill(impedance)
   // Over the whole line as one unit of length.
-  const alpha = db.map((loss) => loss / DB_PER_NEPER)
-  const beta = hz.map((f) => 2 * Math.PI * f * delay * length)
-  return lineTwoPort({ alpha, beta, zRe, zIm: new Float64Array(hz.length) }, 1, reference)
+  const alpha = new Float64Array(count)
+  const beta = new Float64Array(count)
+  const radians = 2 * Math.PI * delay * length
+  for (let i = 0; i < count; i++) {
+    alpha[i] = (db[i] as number) / DB_PER_NEPER
+    beta[i] = radians * (hz[i] as number)
+  }
+  return lineTwoPort({ alpha, beta, zRe, zIm: new Float64Array(count) }, 1, reference)
 }

@@ -96,6 +96,7 @@ export function linkOf(
       rssDb: null,
       channel: null,
       builds: null,
+      sensitivity: null,
       byBasis,
       lines: inside.map(({ id, row }) => ({
         id,
