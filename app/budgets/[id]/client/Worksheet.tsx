@@ -11,8 +11,10 @@ import { othersByPlace } from './state/othersByPlace'
 import { createPlaceMap } from './state/placeMap'
 import { createRoving } from './state/roving'
 import { useAnnouncement } from './state/useAnnouncement'
+import { useEvaluator } from './state/useEvaluator'
 import { type FirstState, useSheet } from './state/useSheet'
 import { useKept } from './state/useView'
+import { WholeContext } from './state/useWhole'
 
 /**
  * The worksheet of one budget. What must outlive a session (drafts, where the focus is) is kept here; the sheet below is
@@ -54,19 +56,23 @@ export function Worksheet({ first }: { first: FirstState }) {
     }),
     [canWrite, drafts, roving, standing, unsaved, deeds, firstBudget, tell],
   )
-  const reading = useMemo(() => ({ budget: state.budget, evaluation: evaluated(state.budget) }), [state.budget])
+  const { budget } = state
+  const { networks, whole } = useEvaluator(first.budgetId, budget)
+  const reading = useMemo(() => ({ budget, evaluation: evaluated(budget, networks) }), [budget, networks])
 
   return (
     <ReadingContext value={reading}>
       <BenchContext value={bench}>
-        <Sheet
-          key={Math.max(1, state.generation)}
-          first={first}
-          state={state}
-          kept={kept}
-          stand={deeds?.stand ?? null}
-        />
-        <Announcer said={said} refusal={refusal} onHeard={() => setRefusal(null)} />
+        <WholeContext value={whole}>
+          <Sheet
+            key={Math.max(1, state.generation)}
+            first={first}
+            state={state}
+            kept={kept}
+            stand={deeds?.stand ?? null}
+          />
+          <Announcer said={said} refusal={refusal} onHeard={() => setRefusal(null)} />
+        </WholeContext>
       </BenchContext>
     </ReadingContext>
   )
