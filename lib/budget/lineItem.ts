@@ -1,4 +1,4 @@
-import { contentName } from './contentName'
+import { contentName, joinedName } from './contentName'
 import type { EvidenceData } from './evaluation'
 import { inOrder, livingRecord } from './record'
 import { restsOn } from './restsOn'
@@ -33,7 +33,8 @@ export function lineItems(budget: Budget, evidence: EvidenceData): LineItem[] {
   return inOrder(budget, 'lines').map(([id, line]) => {
     const assembly = livingRecord(budget, 'assemblies', line.assembly)
     const lossClass = lossClassOf(budget, line)
-    const content = `${contentName(`lines/${id}`, line)}|${classContent(line, lossClass)}|${restsOn(budget, evidence, line)}`
+    const own = contentName('lines', id, line)
+    const content = joinedName(own, classContent(line, lossClass), restsOn(budget, evidence, line))
     return { id, line, lane: null, assembly, lossClass, content }
   })
 }
@@ -52,7 +53,7 @@ function lossClassOf(budget: Budget, line: Line): LossClass | null {
 }
 
 function classContent(line: Line, lossClass: LossClass | null): string {
-  return lossClass === null ? '' : contentName(`lossClasses/${line.lossClass}`, lossClass)
+  return lossClass === null ? '' : contentName('lossClasses', line.lossClass ?? '', lossClass)
 }
 
 export function ownerOf({ line, assembly }: LineItem): Owner | null {

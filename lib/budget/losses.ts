@@ -11,6 +11,7 @@ import type { Signalling } from './signalling'
 /** The losses that one evaluation asks for: each line, in each of its lanes, at a frequency and in a corner. */
 export class Losses {
   private readonly corners = new Map<Conditions | null, string>()
+  private readonly places = new Map<Conditions | null, Map<number, string>>()
   /** Ω, differential; null where the budget does not say it. */
   readonly reference: number | null
   /** °C of the reference corner. */
@@ -26,7 +27,7 @@ export class Losses {
   }
 
   at(item: LineItem, hz: number, corner: Conditions | null): LineLoss {
-    return rememberedLoss(`${this.nameOf(item, corner)}|${hz}`, () =>
+    return rememberedLoss(item.content, this.place(hz, corner), () =>
       lineLoss(item, {
         budget: this.budget,
         evidence: this.evidence,
@@ -45,10 +46,21 @@ export class Losses {
     return `${item.content}|${this.conditions(corner)}`
   }
 
+  /** A name of everything but the line, the same string each time. */
+  private place(hz: number, corner: Conditions | null): string {
+    const places = this.places.get(corner) ?? new Map<number, string>()
+    this.places.set(corner, places)
+    const known = places.get(hz)
+    if (known !== undefined) return known
+    const name = `${this.conditions(corner)}|${hz}`
+    places.set(hz, name)
+    return name
+  }
+
   private conditions(corner: Conditions | null): string {
     const known = this.corners.get(corner)
     if (known !== undefined) return known
-    const own = corner === null ? '' : contentName('corner', corner)
+    const own = corner === null ? '' : contentName('corner', '', corner)
     const name = `${this.reference}|${this.referenceTemperature}|${this.signalling.content}|${own}`
     this.corners.set(corner, name)
     return name

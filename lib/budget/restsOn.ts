@@ -16,7 +16,7 @@ function fileContent(budget: Budget, evidence: EvidenceData, id: string): string
   const record = livingRecord(budget, 'evidence', id)
   if (record === null) return 'gone'
   const read = evidence.get(record.sha256 ?? '')
-  return `${contentName(`evidence/${id}`, record)}:${read === undefined ? 'unread' : nameOfRead(read)}`
+  return `${contentName('evidence', id, record)}:${read === undefined ? 'unread' : nameOfRead(read)}`
 }
 
 const names = new WeakMap<EvidenceNetwork, number>()
@@ -34,7 +34,7 @@ function stackContent(budget: Budget, assembly: string | null): string {
   let name = ''
   for (const id in budget.layers) {
     const layer = budget.layers[id]
-    if (layer && layer.assembly === assembly && !layer.removed) name += `${contentName(`layers/${id}`, layer)},`
+    if (layer && layer.assembly === assembly && !layer.removed) name += `${contentName('layers', id, layer)},`
   }
   return name
 }

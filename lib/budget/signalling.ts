@@ -20,7 +20,7 @@ const kept = new Map<string, Signalling>()
 
 /** The link's signalling, from what the head says. The same head is computed once. */
 export function signallingOf(head: Head): Signalling {
-  const content = contentName('head', head)
+  const content = contentName('head', '', head)
   const known = kept.get(content)
   if (known) return known
   if (kept.size >= KEPT) kept.clear()

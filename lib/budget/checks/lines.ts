@@ -32,7 +32,7 @@ export const lines: Check = ({ context, lines: evaluations }) => {
       referenceTemperature: losses.referenceTemperature,
       evidence,
     }
-    const file = evidence === null ? '' : contentName(`evidence/${evidenceIdOf(item)}`, evidence)
+    const file = evidence === null ? '' : contentName('evidence', evidenceIdOf(item) ?? '', evidence)
     for (const draft of remembered(item, beside, file)) found.push(draft)
   }
   return found
