@@ -73,21 +73,24 @@ export function lineLoss(item: LineItem, asked: Asked): LineLoss {
   if (found === null || skew === null) return noLoss(drafts)
   const factor = asked.corner === null ? 1 : cornerFactor(item.line, item.lossClass, asked.corner)
   const known = typeof factor === 'string' ? 1 : factor
-  const grown = atLeastMaximum(item, asked, found.db * known)
+  const least = asked.corner === null ? Number.NEGATIVE_INFINITY : leastIn(item, asked)
+  const grown = Math.max(least, found.db * known)
   const varied = variationOf(item, fields, found, grown, asked.hz, asked.reference)
   if (varied === null) return noLoss(drafts)
   const { spread, random } = varied
-  const extreme = asked.corner?.fabrication ?? 'nominal'
+  // A number that contains the spread of fabrication is at no extreme of it.
+  const extreme = item.line.processIncluded ? 'nominal' : (asked.corner?.fabrication ?? 'nominal')
   const shift = extreme === 'high-loss' ? spread.highExtreme : extreme === 'low-loss' ? -spread.lowExtreme : 0
+  const moved = Math.max(least, grown + shift)
   return {
-    nominal: grown + shift + skew,
+    nominal: moved + skew,
     by: found.by,
     beside: found.beside,
     spread: extreme === 'nominal' ? spread : NO_SPREAD,
     random: extreme === 'nominal' ? random : NOT_RANDOM,
     computed: found.computed,
     piece: found.piece,
-    factor: found.db === 0 ? known : (grown + shift) / found.db,
+    factor: found.db === 0 ? known : moved / found.db,
     cornerUnknown: typeof factor === 'string' ? factor : null,
     drafts,
   }
@@ -122,11 +125,11 @@ function foundIn(item: LineItem, asked: Asked, fields: Findings<'lines'>, corner
   return loss && { ...loss, spreadDb: 0, computed: found, piece }
 }
 
-/** A guaranteed maximum is never lowered by a corner. */
-function atLeastMaximum(item: LineItem, asked: Asked, grown: number): number {
-  if (asked.corner === null || holdsIn(item.line, item.lossClass).grade !== 'maximum') return grown
+/** A guaranteed maximum is never lowered by a corner: what it says where it holds. */
+function leastIn(item: LineItem, asked: Asked): number {
+  if (holdsIn(item.line, item.lossClass).grade !== 'maximum') return Number.NEGATIVE_INFINITY
   const own = foundIn(item, asked, Findings.ofLine(item.id, item.line, []), null)
-  return own === null ? grown : Math.max(own.db, grown)
+  return own?.db ?? Number.NEGATIVE_INFINITY
 }
 
 function skewOf(fields: Findings<'lines'>, hz: number): number | null {

@@ -27,21 +27,23 @@ export function pieceLoss(
   reference: number | null,
 ): PieceLoss | null {
   if (hz < piece.from * (1 - EDGE) || hz > piece.to * (1 + EDGE)) return outside(piece, fields, line, hz)
-  const at = Float64Array.of(Math.min(Math.max(hz, piece.from), piece.to))
+  const within = Math.min(Math.max(hz, piece.from), piece.to)
+  const at = Float64Array.of(within)
   const counted = piece.attenuation === null ? null : (piece.attenuation(at)[0] ?? null)
   const by =
     line.model === 'network' ? 'measured' : line.model === 'table' || line.model === 'class' ? 'table' : 'computed'
   if (reference === null)
     return counted === null ? noReference(fields) : finite(fields, { db: counted, by, beside: [] })
   const s = piece.twoPort(at, reference)
-  const insertion = -20 * Math.log10(Math.hypot(s[4] as number, s[5] as number))
+  // Subtracted from 0: a loss of nothing must not become −0, which JSON does not know.
+  const insertion = 0 - 20 * Math.log10(Math.hypot(s[4] as number, s[5] as number))
   if (counted !== null) {
     const beside = piece.reflects ? [{ what: 'mismatch' as const, db: insertion - counted }] : []
-    return finite(fields, { db: counted, by, beside: [...beside, ...(piece.beside?.(hz) ?? [])] })
+    return finite(fields, { db: counted, by, beside: [...beside, ...(piece.beside?.(within) ?? [])] })
   }
   const passed = 1 - (s[0] as number) ** 2 - (s[1] as number) ** 2
   const dissipated = passed > 0 ? [{ what: 'dissipated' as const, db: insertion + 10 * Math.log10(passed) }] : []
-  return finite(fields, { db: insertion, by, beside: [...dissipated, ...(piece.beside?.(hz) ?? [])] })
+  return finite(fields, { db: insertion, by, beside: [...dissipated, ...(piece.beside?.(within) ?? [])] })
 }
 
 function finite(fields: Findings<'lines'>, loss: PieceLoss): PieceLoss | null {

@@ -8,7 +8,7 @@ import type { ChannelEvaluation } from '../evaluation'
 import { judgeCurve, limitsOver } from './curve'
 import { bandOf, gridOf } from './grid'
 import { isReserve, joins } from './members'
-import { valueAt, worstReturn } from './overGrid'
+import { finite, valueAt, worstReturn } from './overGrid'
 import { samplesOf } from './samples'
 
 /** Frequencies of a sweep. */
@@ -68,8 +68,8 @@ export function channelOf(context: Context, swept: Swept): ChannelEvaluation | n
     curve: swept.curve && judgeCurve(swept.curve, hz, lossDb, held, lacking.length === 0),
     trace: {
       hz: Array.from(hz),
-      lossDb: finite(lossDb),
-      returnLossDb: returnDb && finite(returnDb),
+      lossDb: Array.from(lossDb, finite),
+      returnLossDb: returnDb && Array.from(returnDb, finite),
       limitDb: swept.curve && limitsOver(swept.curve, hz),
     },
   }
@@ -78,11 +78,6 @@ export function channelOf(context: Context, swept: Swept): ChannelEvaluation | n
 const ids = (lines: readonly Counted[]) => lines.map(({ item }) => item.id)
 const decibels = (lines: readonly Counted[]) =>
   lines.reduce((sum, { sign, loss }) => sum + sign * (loss.nominal ?? 0), 0)
-
-/** What JSON can say: Infinity, where nothing passes or comes back, is null. */
-function finite(db: Float64Array): (number | null)[] {
-  return Array.from(db, (one) => (Number.isFinite(one) ? one : null))
-}
 
 function lesser(a: Float64Array, b: Float64Array): Float64Array {
   return a.map((db, k) => Math.min(db, b[k] as number))

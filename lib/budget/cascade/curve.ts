@@ -1,13 +1,10 @@
 import { type LimitCurve, limitAt, worstAgainst } from '../../channel/limits'
 import type { CurveEvaluation } from '../evaluation'
-
-/** Hz below which a curve is not asked for although it begins there: the sweep starts here. */
-const LOWEST_ASKED = 0.05e9
-/** A band that ends a hair before the curve still reaches it. */
-const EDGE = 1e-6
+import { reaches } from './grid'
 
 /**
- * Holds the cascade's loss against a limit curve. What is joined may miss it even while lines lack data.
+ * Holds the cascade's loss against a limit curve. What is joined may miss it even while lines lack data; where nothing passes, or
+ * no steady state is, there is no number to hold against it, and the rest cannot say that it is kept.
  * @param held dB held back at every frequency
  * @param complete whether every line between the planes is in the loss
  */
@@ -18,12 +15,15 @@ export function judgeCurve(
   held: number,
   complete: boolean,
 ): CurveEvaluation {
-  const from = hz[0] ?? Number.POSITIVE_INFINITY
-  const to = hz[hz.length - 1] ?? 0
-  const reaches = from <= Math.max(curve.from, LOWEST_ASKED) * (1 + EDGE) && to >= curve.to * (1 - EDGE)
-  const missed = worstAgainst(curve, hz, held === 0 ? lossDb : lossDb.map((db) => db + held))
+  const known = (_: number, k: number) => Number.isFinite(lossDb[k])
+  const at = hz.filter(known)
+  const missed = worstAgainst(
+    curve,
+    at,
+    lossDb.filter(known).map((db) => db + held),
+  )
   return {
-    whole: complete && reaches,
+    whole: complete && at.length === hz.length && reaches(hz, curve.from, curve.to),
     missed: missed && {
       fromHz: missed.missedFromHz,
       toHz: missed.missedToHz,

@@ -3,6 +3,16 @@ import type { Piece } from '../models/piece'
 /** Hz: the fitted loss begins here (physics: the usual start of a fitting band, IEEE 802.3 clauses 85 and 92). */
 const LOWEST = 0.05e9
 
+/** A band that ends a hair before what is asked for still reaches it. */
+const EDGE = 1e-6
+
+/** Whether a sweep says something about all of a range; nobody is asked for less than 0.05 GHz, where it begins. */
+export function reaches(hz: Float64Array, from: number, to: number): boolean {
+  const first = hz[0] ?? Number.POSITIVE_INFINITY
+  const last = hz[hz.length - 1] ?? 0
+  return first <= Math.max(from, LOWEST) * (1 + EDGE) && last >= to * (1 - EDGE)
+}
+
 /** The band that all pieces of a cascade hold over. */
 export type Band = { readonly from: number; readonly to: number }
 

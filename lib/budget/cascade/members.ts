@@ -10,10 +10,10 @@ const BEGINS_BELOW = 0.25
 /** A number holds within ±2 % of its frequency. */
 const EDGE = 1.02
 
-/** The line as a member of the cascade, if its data begin low enough and reach the allowance's frequency. */
+/** The line as a member of the cascade, if it is a piece of the channel and its data begin low enough and reach the allowance's frequency. */
 export function joins(line: Counted, atHz: number): Member | null {
   const { piece, nominal } = line.loss
-  if (piece === null || nominal === null || line.sign !== 1) return null
+  if (piece === null || nominal === null || line.sign !== 1 || isReserve(line.item)) return null
   return piece.from <= BEGINS_BELOW * atHz && piece.to * EDGE >= atHz ? { line, piece } : null
 }
 

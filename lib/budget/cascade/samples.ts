@@ -20,14 +20,16 @@ export function samplesOf(
   hz: Float64Array,
   reference: number,
 ): Float64Array {
-  const known = kept.get(content)
+  // A corner's factor also follows from the frequency that the loss was asked at.
+  const name = `${content}|${loss.factor}`
+  const known = kept.get(name)
   if (known && known.hz === hz) return known.s
   if (kept.size >= MOST) kept.clear()
   const s = piece.twoPort(hz, reference)
   if (loss.factor !== 1) multiply(s, hz, piece, loss.factor)
   const skew = typedValue(TIME, item.line.skew)
   if (skew) skewed(s, hz, skew)
-  kept.set(content, { hz, s })
+  kept.set(name, { hz, s })
   return s
 }
 

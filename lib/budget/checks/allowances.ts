@@ -2,6 +2,7 @@ import { holdsAt } from '../../channel/lines'
 import { formatScaled } from '../../channel/units'
 import type { Judged } from '../allowance/judge'
 import type { FlagDraft } from '../flags'
+import { LOSS, typedValue } from '../quantities'
 import { nameOf } from '../record'
 import type { Check } from './check'
 
@@ -105,7 +106,9 @@ function* beside(one: Judged): Generator<FlagDraft> {
       'Give every line between its planes a model or a file that reaches over the curve.',
     )
   }
-  if (one.allowance.returnLossFloor !== null && !channel?.returnLoss) {
+  const { whole, worstDb = null } = channel?.returnLoss ?? { whole: false }
+  const missesFloor = worstDb !== null && worstDb < (typedValue(LOSS, one.allowance.returnLossFloor) ?? 0)
+  if (one.allowance.returnLossFloor !== null && !whole && !missesFloor) {
     yield flag(
       one,
       'floor-not-judged',

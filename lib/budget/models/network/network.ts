@@ -1,13 +1,11 @@
 import { fixtureImpedances, removeFixtures } from '../../../channel/fixtures'
-import { tooCoarse } from '../../../channel/networks'
 import type { Network } from '../../../channel/networks/network'
 import type { Refusal } from '../../../channel/networks/refusal'
-import { passivity } from '../../../channel/quality'
-import { formatScaled } from '../../../channel/units'
 import type { Model, ModelInput } from '../model'
 import type { Computed, Piece } from '../piece'
 import { longUniform } from './longUniform'
 import { perLengthOf } from './perLength'
+import { sayQuality } from './quality'
 import { insertionAt, sampled } from './samples'
 import { twoPortOf } from './twoPortOf'
 
@@ -26,7 +24,7 @@ export const network: Model = (input) => {
   const file = twoPortOf(input, 'evidence')
   const own = file && withoutFixtures(input, file)
   if (own === null) return null
-  sayQuality(input, own)
+  sayQuality(input, 'evidence', own)
   const piece = line.taken === 'discrete' ? discrete(own) : longUniform(input, own)
   return piece && ({ values: {}, build: () => piece } satisfies Computed)
 }
@@ -78,25 +76,4 @@ function discrete(own: Network): Piece {
     beside: (hz) => [{ what: 'native', db: insertionAt(own, hz) }],
     measured: own,
   }
-}
-
-function sayQuality({ fields, hz }: ModelInput, own: Network): void {
-  const passive = passivity(own)
-  if (passive.grade === 'poor' || passive.grade === 'inconclusive') {
-    fields.say(
-      'not-passive',
-      'evidence',
-      `${fields.name}: its file gives out more than it takes in: the largest singular value of S is ${passive.largest.value.toFixed(4)} at ${formatScaled(passive.largest.hz, 'frequency')} (IEEE 370 passivity ${passive.percent.toFixed(1)} %, ${passive.grade}).`,
-      'Measure or simulate it again; look at the calibration and at what was removed.',
-    )
-  }
-  const coarse = tooCoarse(own.hz, own.s)
-  if (coarse === null) return
-  const [from, to] = [coarse.fromHz, coarse.toHz].map((at) => formatScaled(at, 'frequency'))
-  fields.say(
-    'coarse-file',
-    'evidence',
-    `${fields.name}: between two points of its file, ${from} and ${to}, the phase turns by ${((coarse.turn * 180) / Math.PI).toFixed(0)}°, too far to say what lies between.`,
-    `Take the data at closer frequencies, at least around ${formatScaled(hz, 'frequency')}.`,
-  )
 }

@@ -5,6 +5,7 @@ import { LENGTH } from '../../quantities'
 import type { ModelInput } from '../model'
 import type { Computed, Piece } from '../piece'
 import { FIT_FROM } from './longUniform'
+import { sayQuality } from './quality'
 import { twoPortOf } from './twoPortOf'
 
 const DB_PER_NEPER = 20 / Math.LN10
@@ -20,6 +21,8 @@ export function perLengthOf(input: ModelInput): Computed | null {
   const long = twoPortOf(input, 'evidence')
   const short = twoPortOf(input, 'shortEvidence')
   if (length === null || difference === null || long === null || short === null) return null
+  sayQuality(input, 'evidence', long)
+  sayQuality(input, 'shortEvidence', short)
   const found = propagationFromTwoLengths(long, short, difference)
   if ('reason' in found) {
     return fields.say(

@@ -55,14 +55,15 @@ function chosen(input: ModelInput, field: Field, record: EvidenceRecord, network
   const twoPort = differentialTwoPort(network, map)
   if (map.from.length === 2 || record.modes === 'mixed-mode') return twoPort
   const said = typedValue(RESISTANCE, record.reference)
-  if (record.modes === 'mixed-as-two-ports') return said === null ? twoPort : withReference(twoPort, () => said)
+  if (record.modes === 'mixed-as-two-ports')
+    return said === null ? twoPort : { ...twoPort, reference: Float64Array.of(said, 0, said, 0) }
   fields.say(
     'single-ended-taken-as-differential',
     field,
     `${fields.name}: its file is single-ended; a pair of two such lines without coupling is taken, at twice the file's reference.`,
     'Attach a file of the pair with four ports.',
   )
-  return withReference(twoPort, (ohm) => 2 * ohm)
+  return { ...twoPort, reference: twoPort.reference.map((part) => 2 * part) }
 }
 
 function mapOf(input: ModelInput, field: Field, record: EvidenceRecord, network: Network) {
@@ -97,9 +98,4 @@ function mapOf(input: ModelInput, field: Field, record: EvidenceRecord, network:
     )
   }
   return guess.map
-}
-
-function withReference(twoPort: Network, of: (ohm: number) => number): Network {
-  const reference = Float64Array.from(twoPort.reference, (part, at) => (at % 2 === 0 ? of(part) : 0))
-  return { ...twoPort, reference }
 }
