@@ -29,6 +29,11 @@ test('forged peer and nonce headers are replaced by our own', async () => {
   expect(response.headers.get('content-security-policy')).toContain(`'nonce-${seen['x-nonce']}'`)
 })
 
+test('a worker of a page is a file of this server', async () => {
+  const { headers } = await fetch(await listen())
+  expect(headers.get('content-security-policy')?.split('; ')).toContain("worker-src 'self'")
+})
+
 test('each request has a nonce of its own', async () => {
   const url = await listen()
   const policies = await Promise.all(
