@@ -11,6 +11,7 @@ import * as budgets from './v1/budgets/declaration'
 import * as catalogueEntry from './v1/catalogues/[id]/declaration'
 import * as catalogues from './v1/catalogues/declaration'
 import * as evaluate from './v1/evaluate/declaration'
+import * as example from './v1/examples/[id]/declaration'
 import * as health from './v1/health/declaration'
 import * as openapi from './v1/openapi.json/declaration'
 import * as owner from './v1/owner/declaration'
@@ -30,6 +31,7 @@ export const OPERATIONS: readonly Declaration[] = [
   token,
   evaluate,
   budgets,
+  example,
   budget,
   evaluation,
   trail,

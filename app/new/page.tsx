@@ -1,17 +1,18 @@
 import type { Metadata } from 'next'
 import form from '../form/form.module.css'
+import { services } from '../services'
 import { Shell } from '../shell/Shell'
 import { signedIn } from '../shell/signedIn'
 import { BlankForm } from './client/BlankForm'
+import { ExampleForm } from './client/ExampleForm'
 import { FileForm } from './client/FileForm'
-import { ScenarioForm } from './client/ScenarioForm'
 import css from './new.module.css'
-import { scenarios } from './scenarios'
 
 export const metadata: Metadata = { title: 'New budget' }
 
 export default async function NewBudgetPage() {
   const identity = await signedIn('/new')
+  const examples = await services().examples.list()
   return (
     <Shell where="New budget" identity={identity}>
       <div className={form.sheet}>
@@ -26,7 +27,7 @@ export default async function NewBudgetPage() {
           </section>
           <section className={form.part} aria-labelledby="example">
             <h2 id="example">From an example link</h2>
-            <ScenarioForm scenarios={scenarios()} />
+            <ExampleForm examples={examples} />
           </section>
           <section className={form.part} aria-labelledby="file">
             <h2 id="file">From a budget file</h2>

@@ -4,7 +4,7 @@ import type { Identity } from '../access/identity'
 import { readableSecret } from '../access/passwords'
 import type { AccessService, PersonSummary } from '../access/service'
 import type { BudgetService } from '../sync/services'
-import { readScenarios } from './scenarios'
+import { attachedFiles, readScenarios } from './scenarios'
 
 type DemoParts = { access: AccessService; budgets: BudgetService; ownerCode: string; directory: string; folder: string }
 
@@ -23,9 +23,10 @@ export async function seedDemo({ access, budgets, ownerCode, directory, folder }
   }
   const text = `${lines.join('\n')}\n`
   await writeFile(join(directory, 'demo-passwords.txt'), text, { mode: 0o600, flag: 'wx' })
-  for (const { budget, members } of links) {
+  for (const link of links) {
+    const { budget, members } = link
     const owner = Object.keys(members).find((id) => members[id] === 'owner')
-    const { id } = await budgets.create(identityOf(personNamed(owner)), 'import', budget)
+    const { id } = await budgets.create(identityOf(personNamed(owner)), 'import', budget, attachedFiles(link))
     for (const [member, role] of Object.entries(members)) {
       if (role !== 'owner') await access.setMember(id, personNamed(member).id, role)
     }

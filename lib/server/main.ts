@@ -2,7 +2,7 @@ import { existsSync } from 'node:fs'
 import { join, resolve } from 'node:path'
 import { ConfigError, readConfig } from './boot/config.mjs'
 import { seedDemo } from './demo'
-import { startServer } from './start'
+import { EXAMPLES, startServer } from './start'
 
 const root = process.cwd()
 
@@ -23,7 +23,7 @@ try {
       budgets: server.budgets,
       ownerCode: server.ownerCode,
       directory: config.directory,
-      folder: join(root, 'seed-scenarios'),
+      folder: join(root, EXAMPLES),
     })
     process.stdout.write(
       `\nThe people of the demo, with their passwords (kept in ${resolve(config.directory, 'demo-passwords.txt')}):\n\n${passwords}`,

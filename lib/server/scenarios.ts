@@ -1,9 +1,11 @@
 import { readdir, readFile } from 'node:fs/promises'
-import { join } from 'node:path'
+import { basename, join } from 'node:path'
 import { z } from 'zod'
 import { readJson } from '../budget/jsonText'
 import { type Budget, budgetSchema, DISCIPLINES, ID } from '../budget/schema'
+import { sha256Hex } from '../records/sha256'
 import type { Role } from '../sheet/wire'
+import type { AttachedFile } from '../sync/services'
 
 /** The invented people and links of seed-scenarios. */
 export type Scenarios = {
@@ -15,8 +17,17 @@ export type ScenarioLink = {
   /** Name of the file, without its ending. */
   readonly id: string
   readonly budget: Budget
+  /** The files that its evidence names, also that of lines which were taken out. */
+  readonly files: readonly ScenarioFile[]
   /** Person id of people.json → role; exactly one owner. */
   readonly members: Readonly<Record<string, Role>>
+}
+
+export type ScenarioFile = {
+  readonly name: string
+  readonly mediaType: string
+  readonly sha256: string
+  readonly bytes: Uint8Array
 }
 
 const PEOPLE = 'people.json'
@@ -34,7 +45,7 @@ const peopleFile = z.strictObject({
 })
 
 /**
- * Reads every budget file of the folder, by name, and people.json beside them.
+ * Reads every budget file of the folder, by name, the files that its evidence names, and people.json beside them.
  * @throws Error that names the file, and what in it is wrong
  */
 export async function readScenarios(folder: string): Promise<Scenarios> {
@@ -43,12 +54,39 @@ export async function readScenarios(folder: string): Promise<Scenarios> {
   const links = await Promise.all(
     names.map(async (name) => {
       const id = name.replace(/\.json$/, '')
-      return { id, budget: await readChecked(folder, name, budgetSchema), members: members[id] ?? {} }
+      const budget = await readChecked(folder, name, budgetSchema)
+      return { id, budget, files: await filesOf(folder, name, budget), members: members[id] ?? {} }
     }),
   )
   const wrong = contradiction(people, links, Object.keys(members))
   if (wrong !== null) throw new Error(`${join(folder, PEOPLE)}: ${wrong}`)
   return { people, links }
+}
+
+/** The link's files, to be attached to a budget made of it. */
+export function attachedFiles({ files }: ScenarioLink): AttachedFile[] {
+  return files.map(({ name, mediaType, bytes }) => ({ name, mediaType, bytes: inOnePiece(bytes) }))
+}
+
+async function* inOnePiece(bytes: Uint8Array) {
+  yield bytes
+}
+
+/** A record that says another SHA-256 or size than its file has would be found by nobody, or lie. */
+async function filesOf(folder: string, budgetName: string, { evidence }: Budget): Promise<ScenarioFile[]> {
+  return Promise.all(
+    Object.entries(evidence).map(async ([id, { name, mediaType, sha256, size }]) => {
+      const wrong = (what: string) => new Error(`${join(folder, budgetName)}: evidence '${id}': ${what}`)
+      if (name === null || basename(name) !== name || mediaType === null)
+        throw wrong('give it a file name and a media type.')
+      const bytes = await readFile(join(folder, name)).catch(() => null)
+      if (bytes === null) throw wrong(`there is no file ${name} beside it.`)
+      const own = { sha256: sha256Hex(bytes), size: bytes.byteLength }
+      if (own.sha256 !== sha256 || own.size !== size)
+        throw wrong(`${name} has the SHA-256 ${own.sha256} and ${own.size} bytes.`)
+      return { name, mediaType, sha256, bytes }
+    }),
+  )
 }
 
 async function readChecked<T extends z.ZodType>(folder: string, name: string, schema: T): Promise<z.output<T>> {

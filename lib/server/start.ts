@@ -7,10 +7,14 @@ import type { Store } from '../records/types'
 import { openSync } from '../sync/open'
 import type { Config } from './boot/config.mjs'
 import { openEvaluator } from './evaluation/open'
+import { createExampleService } from './examples'
 import { guard } from './guard'
 import { openPages } from './pages'
 import { publish } from './publish'
 import { readSecret } from './secret'
+
+/** The folder of the invented links, below the project's own. */
+export const EXAMPLES = 'seed-scenarios'
 
 export type RunningServer = {
   readonly url: string
@@ -46,6 +50,7 @@ export async function startServer(
     budgets: sync.budgets,
     evidence: sync.evidence,
     catalogues: sync.catalogues,
+    examples: createExampleService(join(root, EXAMPLES), sync.budgets),
     evaluate: evaluator.evaluateAlone.bind(evaluator),
     ready: () => ready(store),
     submit: sync.submit,

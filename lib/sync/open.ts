@@ -8,7 +8,7 @@ import { createCatalogueService } from './catalogues'
 import { type Clock, type Log, systemTimers, type Timers } from './clock'
 import { Committer } from './committer'
 import type { Evaluator } from './evaluator'
-import { createEvidenceService } from './evidence'
+import { createAttachments, createEvidenceService } from './evidence'
 import { Rooms } from './rooms'
 import type { Services } from './services'
 import { Snapshots } from './snapshots'
@@ -47,6 +47,8 @@ export async function openSync(options: SyncOptions): Promise<Sync> {
   const snapshots = new Snapshots(journal, log)
   const problems = new Map(store.problems.map(({ budget, what }) => [budget, what]))
   const rooms = new Rooms({ journal, records, sessions, committer, snapshots, clock, log, engine, evaluator, problems })
+  const attachments = createAttachments(store.evidence, records, clock.now)
+  const reader = new Reader(journal, rooms, evaluator)
   const collabs: Collab[] = []
   const stopListening = sessions.onRevoked((revoked) => {
     if ('session' in revoked) for (const room of rooms.all()) room.closeSession(revoked.session)
@@ -57,10 +59,11 @@ export async function openSync(options: SyncOptions): Promise<Sync> {
     budgets: createBudgetService(
       { journal, records, committer, now: clock.now, engine, evaluator, log },
       records,
-      new Reader(journal, rooms, evaluator),
+      reader,
       rooms,
+      attachments,
     ),
-    evidence: createEvidenceService(store.evidence, records, clock.now),
+    evidence: createEvidenceService(store.evidence, records, attachments, (budget) => reader.forget(budget)),
     catalogues: createCatalogueService(records, clock.now),
     submit: createSubmit(rooms),
     attach(server) {

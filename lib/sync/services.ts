@@ -21,6 +21,7 @@ export type Services = {
   readonly budgets: BudgetService
   readonly evidence: EvidenceService
   readonly catalogues: CatalogueService
+  readonly examples: ExampleService
   /** Evaluates a budget that is stored nowhere, and so without files. */
   evaluate(budget: Budget, asked: Asked): Promise<Evaluation>
   /** Null where both databases answer, else what is wrong, in words that may be shown to anybody. */
@@ -39,8 +40,11 @@ export type SubmittedEdit = {
 
 export type BudgetService = {
   list(identity: Identity): Promise<BudgetSummary[]>
-  /** Makes journal entry 1, then the record; the person becomes the owner. */
-  create(identity: Identity, door: Door, budget: Budget): Promise<{ id: string }>
+  /**
+   * Stores the files, makes journal entry 1, then the record; the person becomes the owner. The files come first, so that already
+   * the first margins count by them.
+   */
+  create(identity: Identity, door: Door, budget: Budget, files?: readonly AttachedFile[]): Promise<{ id: string }>
   read(budget: string): Promise<{ budget: Budget; epoch: number; seq: number; head: string } | null>
   evaluation(budget: string): Promise<{ evaluation: Evaluation; seq: number } | null>
   /** after: oldest first, for programs; latest: newest first, for people. Null where the budget does not exist. */
@@ -66,13 +70,15 @@ export type BudgetSummary = {
 
 export type EvidenceService = {
   /** Stores the bytes once by hash (write aside, sync, rename) and describes them for this budget. */
-  store(
-    budget: string,
-    identity: Identity,
-    file: { name: string; mediaType: string; bytes: AsyncIterable<Uint8Array> },
-  ): Promise<StoredEvidence>
+  store(budget: string, identity: Identity, file: AttachedFile): Promise<StoredEvidence>
   list(budget: string): Promise<StoredEvidence[]>
   open(budget: string, sha256: string): Promise<{ evidence: StoredEvidence; stream: ReadableStream<Uint8Array> } | null>
+}
+
+export type AttachedFile = {
+  readonly name: string
+  readonly mediaType: string
+  readonly bytes: AsyncIterable<Uint8Array>
 }
 
 export type StoredEvidence = {
@@ -82,6 +88,22 @@ export type StoredEvidence = {
   readonly size: number
   readonly person: string
   readonly time: number
+}
+
+/** The invented links that a budget can start from. */
+export type ExampleService = {
+  /** With the verdict that its files give. */
+  list(): Promise<readonly Example[]>
+  /** A new budget with the example's files attached. Null where there is no such example. */
+  make(identity: Identity, door: Door, id: string): Promise<{ id: string } | null>
+}
+
+export type Example = {
+  readonly id: string
+  readonly name: string
+  readonly description: string
+  readonly verdict: Verdict
+  readonly words: string
 }
 
 /** What people added to the catalogues of this server: whoever is signed in reads it and may add to it. */

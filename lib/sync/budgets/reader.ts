@@ -39,6 +39,11 @@ export class Reader {
     return { ...found, evaluation: await found.evaluations[depth] }
   }
 
+  /** Evaluates anew when next asked, although the budget is the same: a file that it names has come. */
+  forget(budget: string): void {
+    this.kept.delete(budget)
+  }
+
   private async find(budget: string): Promise<Kept | Locked | null> {
     const open = this.rooms.peek(budget)
     if (open) return this.keep(budget, open.state)

@@ -3,6 +3,7 @@ import { evaluate } from '../../budget/evaluate'
 import { budgetSchema, SCHEMA_VERSION } from '../../budget/schema'
 import type { BudgetRecord, Records } from '../../records/types'
 import type { Role } from '../../sheet/wire'
+import type { Attachments } from '../evidence'
 import type { Rooms } from '../rooms'
 import type { BudgetService, BudgetSummary } from '../services'
 import { createBudget, type Making } from './create'
@@ -15,6 +16,7 @@ export function createBudgetService(
   records: Pick<Records, 'budgets' | 'people'>,
   reader: Reader,
   rooms: Pick<Rooms, 'peek'>,
+  attachments: Attachments,
 ): BudgetService {
   return {
     async list(identity: Identity) {
@@ -24,8 +26,11 @@ export function createBudgetService(
       return summaries
     },
 
-    async create(identity, door, budget) {
-      return { id: await createBudget(making, identity, door, budget) }
+    async create(identity, door, budget, files = []) {
+      const kept = await Promise.all(files.map((file) => attachments.keep(file)))
+      const id = await createBudget(making, identity, door, budget)
+      for (const file of kept) await attachments.describe(id, identity, file)
+      return { id }
     },
 
     async read(budget) {

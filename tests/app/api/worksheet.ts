@@ -1,10 +1,14 @@
+import { fileURLToPath } from 'node:url'
 import type { Identity } from '../../../lib/access/identity'
 import { ENGINE } from '../../../lib/budget/engine'
+import { createExampleService } from '../../../lib/server/examples'
 import { evaluatorHere } from '../../../lib/sync/evaluator'
 import { openSync } from '../../../lib/sync/open'
 import type { Services } from '../../../lib/sync/services'
 import { OWNER, ownedWorld, signedIn } from '../../access/world'
 import { PUBLIC_URL, publish } from './caller'
+
+const EXAMPLES = fileURLToPath(new URL('../../../seed-scenarios', import.meta.url))
 
 /** Everything behind the API as the server puts it together, on a directory of its own, and published for the handlers. */
 export async function openWorksheet() {
@@ -29,6 +33,7 @@ export async function openWorksheet() {
     budgets,
     evidence,
     catalogues,
+    examples: createExampleService(EXAMPLES, budgets),
     submit,
     ready: async () => null,
   }

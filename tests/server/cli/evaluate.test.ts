@@ -35,6 +35,7 @@ describe('halfbaud evaluate', () => {
   afterAll(() => rm(folder, { recursive: true }))
 
   it.each([
+    ['larch', 'inside', 0],
     ['sedge', 'inside', 0],
     ['tamarack', 'tight', 1],
     ['osier', 'over', 1],

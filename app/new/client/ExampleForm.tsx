@@ -1,25 +1,35 @@
 'use client'
+import type { Verdict } from '../../../lib/budget/schema'
+import { callApi } from '../../form/client/callApi'
 import { Outcome } from '../../form/client/Outcome'
 import { useSend } from '../../form/client/useSend'
 import form from '../../form/form.module.css'
 import { VerdictMark } from '../../marks/VerdictMark'
 import css from '../new.module.css'
-import type { Scenario } from '../scenarios'
-import { makeBudget, openBudget } from './makeBudget'
+import { openBudget } from './makeBudget'
 
-export function ScenarioForm({ scenarios }: { scenarios: readonly Scenario[] }) {
-  const { busy, problem, onSubmit } = useSend(async ({ scenario }) => {
-    const chosen = scenarios.find(({ id }) => id === scenario)
-    if (chosen) return makeBudget(chosen.budget)
-    return { ok: false, problem: { code: 'none-chosen', sentence: 'Choose one of the links.', fields: {} } }
-  }, openBudget)
+type Example = {
+  readonly id: string
+  readonly name: string
+  readonly description: string
+  readonly verdict: Verdict
+  readonly words: string
+}
+
+export function ExampleForm({ examples }: { examples: readonly Example[] }) {
+  const { busy, problem, onSubmit } = useSend(
+    ({ example = '' }) => callApi('POST', `/api/v1/examples/${encodeURIComponent(example)}`),
+    openBudget,
+  )
   return (
     <form className={form.form} method="post" onSubmit={onSubmit}>
       <fieldset className={css.choices}>
-        <legend className={form.hint}>Invented links that show how a budget is kept; change them freely.</legend>
-        {scenarios.map(({ id, name, description, verdict, words }, at) => (
+        <legend className={form.hint}>
+          Invented links that show how a budget is kept, with the files that they count by; change them freely.
+        </legend>
+        {examples.map(({ id, name, description, verdict, words }, at) => (
           <label key={id} className={css.choice}>
-            <input type="radio" name="scenario" value={id} defaultChecked={at === 0} />
+            <input type="radio" name="example" value={id} defaultChecked={at === 0} />
             <span className={css.name}>{name}</span>
             <span className={css.words}>{description}</span>
             <span className={css.words}>
