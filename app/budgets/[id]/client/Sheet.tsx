@@ -1,7 +1,9 @@
 'use client'
 import { type FocusEvent, type KeyboardEvent, useRef } from 'react'
 import type { Cell } from '../../../../lib/sheet/wire'
+import { BuildsPanel } from './builds/BuildsPanel'
 import { Detail } from './detail/Detail'
+import { FrequencyPanel } from './frequency/FrequencyPanel'
 import { FlagsPanel } from './head/FlagsPanel'
 import { Head } from './head/Head'
 import { Headlines } from './head/Headline'
@@ -99,6 +101,8 @@ export function Sheet({ first, state, kept, stand }: Props) {
               <TrailPanel recent={trail} />
             </div>
           </div>
+          <FrequencyPanel />
+          <BuildsPanel />
           <FlagsPanel />
           <Tables />
         </section>
