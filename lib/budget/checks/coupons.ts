@@ -40,7 +40,7 @@ function measuredClasses(budget: Budget, hz: number): Coupon[] {
   const found: Coupon[] = []
   for (const id in budget.lossClasses) {
     const record = budget.lossClasses[id]
-    if (!record || record.removed || record.basis !== 'measured') continue
+    if (!record || record.removed || record.basis !== 'measured' || record.layer === null) continue
     const stated = typedValue(LOSS_PER_LENGTH, record.lossPerLength)
     const at = typedValue(FREQUENCY, record.at)
     const moved = stated === null || at === null ? null : moveUniformLoss(stated, at, hz)

@@ -12,13 +12,17 @@ import { lineFlag } from './lineFlag'
 export const layers: Check = function* ({ context: { budget, items, lanes, signalling } }) {
   const known = layersOf(budget)
   for (const item of items) {
-    yield* ofItem(item, known)
+    if (namesLayer(item)) yield* ofItem(item, known)
     for (const other of lanes.differing.get(item.id)?.values() ?? []) {
-      if (other.lossClass !== item.lossClass) yield* ofItem(other, known)
+      if (other.lossClass !== item.lossClass && namesLayer(other)) yield* ofItem(other, known)
     }
   }
   const { nyquist } = signalling.evaluation
   if (known.size > 0 && nyquist !== null) yield* anchors(budget, items, nyquist)
+}
+
+function namesLayer({ line, lossClass }: LineItem): boolean {
+  return line.layer !== null || (lossClass !== null && lossClass.layer !== null)
 }
 
 /** Assembly → names of its layers, as they are compared. */

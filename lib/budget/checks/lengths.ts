@@ -19,11 +19,15 @@ const UNITS = ['mm', 'mil', 'in', 'm', 'ft'] as const
 export const lengths: Check = function* ({ context: { items }, lines }) {
   for (const kind of ['trace', 'cable'] as const) {
     const found: { readonly item: LineItem; readonly metres: number }[] = []
+    let [shortest, longest] = [Number.POSITIVE_INFINITY, 0]
     for (const item of items) {
       const metres = item.line.kind === kind ? (lines.get(item.id)?.lengthM ?? 0) : 0
-      if (metres > 0) found.push({ item, metres })
+      if (metres === 0) continue
+      found.push({ item, metres })
+      shortest = Math.min(shortest, metres)
+      longest = Math.max(longest, metres)
     }
-    if (found.length < ENOUGH) continue
+    if (found.length < ENOUGH || longest < AWAY * shortest) continue
     const usual = median(found.map(({ metres }) => metres))
     for (const { item, metres } of found) {
       if (metres < usual * AWAY && metres > usual / AWAY) continue

@@ -3,7 +3,7 @@ import type { FlagDraft } from '../flags'
 import type { LineItem } from '../lineItem'
 import type { Beside, Check, LineCheck } from './check'
 import { claims } from './claims'
-import { evidenceIdOf, evidenceOf } from './evidence'
+import { type EvidenceRecord, evidenceIdOf, evidenceOf } from './evidence'
 import { laminates } from './laminates'
 import { otherConditions } from './otherConditions'
 import { proof } from './proof'
@@ -11,7 +11,13 @@ import { unusualLoss } from './unusualLoss'
 
 const LINE_CHECKS: readonly LineCheck[] = [claims, otherConditions, proof, laminates, unusualLoss]
 
-type Remembered = Beside & { readonly file: string; readonly drafts: readonly FlagDraft[] }
+type Remembered = {
+  /** A name of what the file that proves it says. */
+  readonly file: string
+  readonly nominal: number | null
+  readonly link: Link
+  readonly drafts: readonly FlagDraft[]
+}
 
 /** Lines kept; more than a worksheet has, for several worksheets. */
 const MOST = 20_000
@@ -23,35 +29,38 @@ const kept = new Map<string, Remembered>()
 export const lines: Check = ({ context, lines: evaluations }) => {
   const { budget, losses, signalling, items } = context
   const found: FlagDraft[] = []
+  const link = {
+    nyquist: signalling.evaluation.nyquist,
+    reference: losses.reference,
+    referenceTemperature: losses.referenceTemperature,
+  }
   for (const item of items) {
     const evidence = evidenceOf(budget, item)
-    const beside: Beside = {
-      nominal: evaluations.get(item.id)?.loss.nominalDb ?? null,
-      nyquist: signalling.evaluation.nyquist,
-      reference: losses.reference,
-      referenceTemperature: losses.referenceTemperature,
-      evidence,
-    }
+    const nominal = evaluations.get(item.id)?.loss.nominalDb ?? null
     const file = evidence === null ? '' : contentName('evidence', evidenceIdOf(item) ?? '', evidence)
-    for (const draft of remembered(item, beside, file)) found.push(draft)
+    for (const draft of remembered(item, file, nominal, link, evidence)) found.push(draft)
   }
   return found
 }
 
-function remembered(item: LineItem, beside: Beside, file: string): readonly FlagDraft[] {
+/** What is the same for all lines. */
+type Link = Omit<Beside, 'nominal' | 'evidence'>
+
+function remembered(
+  item: LineItem,
+  file: string,
+  nominal: number | null,
+  link: Link,
+  evidence: EvidenceRecord | null,
+): readonly FlagDraft[] {
   const known = kept.get(item.content)
-  if (known && known.file === file && same(known, beside)) return known.drafts
+  if (known && known.file === file && known.nominal === nominal && same(known.link, link)) return known.drafts
   if (kept.size >= MOST) kept.clear()
-  const drafts = LINE_CHECKS.flatMap((check) => [...check(item, beside)])
-  kept.set(item.content, { ...beside, file, drafts })
+  const drafts = LINE_CHECKS.flatMap((check) => [...check(item, { ...link, nominal, evidence })])
+  kept.set(item.content, { file, nominal, link, drafts })
   return drafts
 }
 
-function same(a: Beside, b: Beside): boolean {
-  return (
-    a.nominal === b.nominal &&
-    a.nyquist === b.nyquist &&
-    a.reference === b.reference &&
-    a.referenceTemperature === b.referenceTemperature
-  )
+function same(a: Link, b: Link): boolean {
+  return a.nyquist === b.nyquist && a.reference === b.reference && a.referenceTemperature === b.referenceTemperature
 }
