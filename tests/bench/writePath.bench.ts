@@ -48,7 +48,8 @@ async function measureOurs() {
       via: 'token' as const,
       expiresAt: null,
     }
-    const tamarack = (await readScenarios(join(process.cwd(), 'seed-scenarios'))).links[0]
+    const { links } = await readScenarios(join(process.cwd(), 'seed-scenarios'))
+    const tamarack = links.find(({ id }) => id === 'tamarack')
     if (!tamarack) throw new Error('No scenario.')
     const { id } = await server.budgets.create(identity, 'import', tamarack.budget)
     const { token } = await server.access.createToken(identity, 'bench', null)

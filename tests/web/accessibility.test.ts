@@ -46,7 +46,12 @@ for (const colorScheme of ['light', 'dark'] as const) {
         await page.goto(path)
         found[path] = await violations(page)
       }
-      for (const name of ['Tamarack fabric link', 'Osier accelerator slot', 'Sedge cabled backplane']) {
+      for (const name of [
+        'Larch mezzanine',
+        'Tamarack fabric link',
+        'Osier accelerator slot',
+        'Sedge cabled backplane',
+      ]) {
         await page.goto('/')
         await openBudget(page, name)
         found[name] = await violations(page)
