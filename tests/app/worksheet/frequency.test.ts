@@ -122,7 +122,12 @@ describe('the cascade over frequency', () => {
   })
   it('a missed curve is named with where and by how much', () => {
     expect(channel.curve?.missed).not.toBeNull()
-    expect(curveWords(channel)).toMatch(/^missed from [\d.]+ GHz to 20 GHz, most at [\d.]+ GHz, by [\d.]+ dB; beyond/)
+    expect(curveWords({ ...channel, curve: { whole: true, missed: null } })).toBe('kept over its whole range')
+    expect(curveWords({ ...channel, curve: { whole: false, missed: null } })).toContain('unknown')
+    expect(curveWords({ ...channel, curve: null })).toBeNull()
+    expect(curveWords(channel)).toMatch(
+      /^missed from [\d.]+ GHz to 20 GHz, most at [\d.]+ GHz, by [\d.]+ dB; not every line/,
+    )
   })
   it('the readout names the figures of one point, and on which side of the ground it lies', () => {
     const row = { hz: 13.28125e9, ghz: 13.28125, loss: 9.7, fitted: 9.69, limit: 9.5, back: null }

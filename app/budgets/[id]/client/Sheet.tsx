@@ -101,9 +101,9 @@ export function Sheet({ first, state, kept, stand }: Props) {
               <TrailPanel recent={trail} />
             </div>
           </div>
+          <FlagsPanel />
           <FrequencyPanel />
           <BuildsPanel />
-          <FlagsPanel />
           <Tables />
         </section>
       </LookContext>

@@ -16,6 +16,7 @@ import { plainDecibels } from '../../../../words/decibels'
 import { roundTicks } from '../trail/margins'
 import { FREQUENCY_AXIS, MARGIN, pointer, TICK, word } from './chartParts'
 import type { ChartRow, Frame } from './chartRows'
+import { nearestRow } from './readoutWords'
 
 type Props = {
   readonly rows: readonly ChartRow[]
@@ -33,21 +34,25 @@ type Props = {
 /** A ledge is a little wider than a line, so that it is seen to be ground. */
 const LEDGE = 0.012
 
-/** The level over frequency: it falls from the top, the ground of the limit lies below it, the power of the data hangs above. */
+/**
+ * The level over frequency: it falls from the top, the ground of the limit lies below it, the power of the data hangs above.
+ * Where a curve is missed the drawing is hatched, says so, and has a post as tall as the excess.
+ */
 export default memo(function LossChart({ rows, frame, nyquist, ledge, missed, read, onRead }: Props) {
   const hatch = `over${useId().replace(/\W/g, '')}`
   const { toGhz, footDb } = frame
   const row = rows[read]
+  const worst = missed && rows[nearestRow(rows, missed.worstAtHz)]
   const half = LEDGE * toGhz
   return (
     <ResponsiveContainer width="100%" height={260}>
-      <ComposedChart data={[...rows]} margin={MARGIN} accessibilityLayer={false} onMouseMove={pointer(onRead)}>
+      <ComposedChart data={rows} margin={MARGIN} accessibilityLayer={false} onMouseMove={pointer(onRead)}>
         <defs>
           <pattern id={hatch} width="7" height="7" patternUnits="userSpaceOnUse">
             <path d="M-1 1l2-2M0 7l7-7M6 8l2-2" fill="none" stroke="var(--over)" strokeWidth="1.2" />
           </pattern>
         </defs>
-        <XAxis {...FREQUENCY_AXIS} domain={[0, toGhz]} ticks={[...roundTicks(0, toGhz)]} />
+        <XAxis {...FREQUENCY_AXIS} domain={[0, toGhz]} ticks={roundTicks(0, toGhz)} />
         <YAxis
           reversed
           domain={[0, footDb]}
@@ -55,7 +60,7 @@ export default memo(function LossChart({ rows, frame, nyquist, ledge, missed, re
           width={40}
           tick={TICK}
           stroke="var(--rule-2)"
-          ticks={[...roundTicks(0, footDb)]}
+          ticks={roundTicks(0, footDb)}
           tickFormatter={(db: number) => plainDecibels(db)}
         />
         <Area
@@ -94,6 +99,16 @@ export default memo(function LossChart({ rows, frame, nyquist, ledge, missed, re
             fillOpacity={1}
             stroke="var(--over)"
             label={word('missed', 'insideBottom')}
+          />
+        )}
+        {missed && worst?.limit != null && (
+          <ReferenceLine
+            segment={[
+              { x: worst.ghz, y: worst.limit },
+              { x: worst.ghz, y: Math.min(footDb, worst.limit + missed.worstDb) },
+            ]}
+            stroke="var(--over)"
+            strokeWidth={4}
           />
         )}
         {nyquist !== null && nyquist / 1e9 <= toGhz && (

@@ -36,15 +36,15 @@ export default memo(function ReturnChart({ rows, toGhz, nyquist, floorDb, worst,
   const under = floorDb !== null && worst !== null && worst.db < floorDb
   return (
     <ResponsiveContainer width="100%" height={150}>
-      <ComposedChart data={[...rows]} margin={MARGIN} accessibilityLayer={false} onMouseMove={pointer(onRead)}>
-        <XAxis {...FREQUENCY_AXIS} domain={[0, toGhz]} ticks={[...roundTicks(0, toGhz)]} />
+      <ComposedChart data={rows} margin={MARGIN} accessibilityLayer={false} onMouseMove={pointer(onRead)}>
+        <XAxis {...FREQUENCY_AXIS} domain={[0, toGhz]} ticks={roundTicks(0, toGhz)} />
         <YAxis
           domain={[0, TOP_DB]}
           allowDataOverflow
           width={40}
           tick={TICK}
           stroke="var(--rule-2)"
-          ticks={[...roundTicks(0, TOP_DB)]}
+          ticks={roundTicks(0, TOP_DB)}
           tickFormatter={(db: number) => plainDecibels(db)}
         />
         {floorDb !== null && (

@@ -46,8 +46,9 @@ export function returnLossWords({ returnLoss }: ChannelEvaluation): string {
 export function curveWords({ curve }: ChannelEvaluation): string | null {
   if (curve === null) return null
   const { missed, whole } = curve
-  const rest = whole ? '' : '; beyond the data it is unknown'
-  if (missed === null) return `${whole ? 'kept over its whole range' : 'not missed where there are data'}${rest}`
+  if (missed === null)
+    return whole ? 'kept over its whole range' : 'not missed by the lines that have data; with all of them unknown'
+  const rest = whole ? '' : '; not every line has data there, so more may be missed'
   const [from, to, at] = [missed.fromHz, missed.toHz, missed.worstAtHz].map(shortFrequency)
   return `missed from ${from} to ${to}, most at ${at}, by ${db(missed.worstDb)}${rest}`
 }
