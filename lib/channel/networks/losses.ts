@@ -30,7 +30,8 @@ export function dissipatedLoss(samples: Float64Array): Float64Array {
 
 function decibelsOf(samples: Float64Array, part: number): Float64Array {
   const db = new Float64Array(samples.length / TWO_PORT)
-  for (let k = 0; k < db.length; k++) db[k] = -10 * Math.log10(power(samples, TWO_PORT * k + part))
+  // Subtracted from 0: of a loss of nothing no −0 comes, which JSON does not know.
+  for (let k = 0; k < db.length; k++) db[k] = 0 - 10 * Math.log10(power(samples, TWO_PORT * k + part))
   return db
 }
 
