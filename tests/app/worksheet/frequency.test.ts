@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { cascadeFacts, curveWords, returnLossWords } from '../../../app/budgets/[id]/client/frequency/cascadeFacts'
 import { chartRows, drawnOf, frameOf } from '../../../app/budgets/[id]/client/frequency/chartRows'
 import { drawnPoints, nearest } from '../../../app/budgets/[id]/client/frequency/drawn'
-import { withoutBand, withoutReflection } from '../../../app/budgets/[id]/client/frequency/lacking'
+import { noReflectionWords, withoutBand, withoutReflection } from '../../../app/budgets/[id]/client/frequency/lacking'
 import { nothingWords } from '../../../app/budgets/[id]/client/frequency/nothingWords'
 import { powerOf } from '../../../app/budgets/[id]/client/frequency/power'
 import { readoutWords, tableRows } from '../../../app/budgets/[id]/client/frequency/readoutWords'
@@ -111,6 +111,11 @@ describe('the cascade over frequency', () => {
       ['first', 'give its impedance, delay and length'],
       ['second', 'give its impedance, delay and length'],
     ])
+  })
+  it('an unknown return loss names the lines that it fails on', () => {
+    expect(noReflectionWords(one.budget, one.allowance)).toBe(
+      'Unknown: these lines have no reflection data: bga, first, second.',
+    )
   })
   it('its figures in words: unknown is said, not passed', () => {
     const facts = new Map(cascadeFacts(one.allowance, channel).map(({ term, value }) => [term, value]))

@@ -69,7 +69,7 @@ describe('the panels of the full evaluation', () => {
     for (const words of [
       '9.69 of 10.29 dB, 9.69 of it with reflection data',
       'unknown: not every line has reflection data',
-      'BGA via',
+      'Unknown: this line has no reflection data: BGA via.',
       'holds at one frequency',
       'missed from',
       'lies below Nyquist',

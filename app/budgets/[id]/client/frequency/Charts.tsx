@@ -5,9 +5,9 @@ import { LOSS, typedValue } from '../../../../../lib/budget/quantities'
 import { plainDecibels } from '../../../../words/decibels'
 import { useReading } from '../state/contexts'
 import css from '../whole/whole.module.css'
-import { returnLossWords } from './cascadeFacts'
 import type { ChartRow, Frame } from './chartRows'
 import { LossLegend } from './LossLegend'
+import { noReflectionWords } from './lacking'
 import { readoutWords } from './readoutWords'
 
 /** The charts' library is large; the words stand before it has come. */
@@ -30,6 +30,7 @@ export function Charts({ allowance, channel, rows, frame, nyquist, read, onRead 
   const id = useId()
   const row = rows[read]
   const { limitDb, atHz } = allowance
+  const backs = channel.trace.returnLossDb !== null
   const ledge = channel.curve === null && limitDb !== null && atHz !== null ? { hz: atHz, db: limitDb } : null
   const floorDb = typedValue(LOSS, budget.allowances[allowance.id]?.returnLossFloor ?? null)
   const worstDb = channel.returnLoss?.worstDb ?? null
@@ -58,11 +59,10 @@ export function Charts({ allowance, channel, rows, frame, nyquist, read, onRead 
       <figure className={css.figure}>
         <figcaption>
           Return loss in dB over GHz, higher is better
-          {floorDb !== null && `; ground: the ${plainDecibels(floorDb)} dB asked for up to Nyquist`}
+          {floorDb !== null && backs && `; ground: the ${plainDecibels(floorDb)} dB asked for up to Nyquist`}
         </figcaption>
-        {channel.trace.returnLossDb === null ? (
-          <p className={css.quiet}>{returnLossWords(channel)}</p>
-        ) : (
+        {!backs && <p className={css.quiet}>{noReflectionWords(budget, allowance)}</p>}
+        {backs && (
           <div aria-hidden="true" className={css.returnChart}>
             <Suspense fallback={null}>
               <ReturnChart

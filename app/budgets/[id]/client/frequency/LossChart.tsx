@@ -81,6 +81,7 @@ export default memo(function LossChart({ rows, frame, nyquist, ledge, missed, re
         />
         {ledge && (
           <ReferenceArea
+            ifOverflow="hidden"
             x1={Math.max(0, ledge.hz / 1e9 - half)}
             x2={Math.min(toGhz, ledge.hz / 1e9 + half)}
             y1={ledge.db}
@@ -93,6 +94,7 @@ export default memo(function LossChart({ rows, frame, nyquist, ledge, missed, re
         )}
         {missed && (
           <ReferenceArea
+            ifOverflow="hidden"
             x1={missed.fromHz / 1e9}
             x2={missed.toHz / 1e9}
             fill={`url(#${hatch})`}

@@ -49,6 +49,7 @@ export default memo(function ReturnChart({ rows, toGhz, nyquist, floorDb, worst,
         />
         {floorDb !== null && (
           <ReferenceArea
+            ifOverflow="hidden"
             x1={0}
             x2={Math.min(toGhz, (nyquist ?? Number.POSITIVE_INFINITY) / 1e9)}
             y1={0}

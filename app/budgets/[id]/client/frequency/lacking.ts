@@ -18,6 +18,14 @@ export function withoutReflection(budget: Budget, { channel }: AllowanceEvaluati
   return (channel?.withoutReflection ?? []).map((id) => lacking(budget, id, reflectionWords))
 }
 
+/** Why there is no return loss, with every line that it fails on by name. */
+export function noReflectionWords(budget: Budget, allowance: AllowanceEvaluation): string {
+  const { channel } = allowance
+  const ids = [...(channel?.withoutBand ?? []), ...(channel?.withoutReflection ?? [])]
+  const names = ids.map((id) => recordName(budget, 'lines', id))
+  return `Unknown: ${names.length === 1 ? 'this line has' : 'these lines have'} no reflection data: ${names.join(', ')}.`
+}
+
 function lacking(budget: Budget, id: string, wordsOf: (budget: Budget, line: Line) => string): Lacking {
   const line = budget.lines[id]
   return { id, name: recordName(budget, 'lines', id), give: line ? wordsOf(budget, line) : 'it was taken out' }
