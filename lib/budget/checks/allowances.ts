@@ -58,7 +58,7 @@ function* frequency(one: Judged, nyquist: number | null, mistake: (hz: number) =
   const { allowance, evaluation } = one
   const { atHz } = evaluation
   if (allowance.at === null) {
-    const taken = atHz === null ? '' : `; the Nyquist frequency of ${formatScaled(atHz, 'frequency')} is taken`
+    const taken = nyquist === null ? '' : `; the Nyquist frequency of ${formatScaled(nyquist, 'frequency')} is taken`
     yield flag(
       one,
       'allowance-frequency-missing',

@@ -4,7 +4,7 @@ import type { Check } from './check'
 /** Fields of a line that say something the number does not follow. */
 export const lineFields: Check = function* ({ context }) {
   for (const { id, line, lossClass } of context.items) {
-    if ((line.count ?? 1) > 1) {
+    if ((line.count ?? 1) > 1 && line.model !== 'via') {
       yield {
         code: 'count-not-used',
         section: 'lines',

@@ -51,7 +51,9 @@ export function OverFrequency({ allowance, channel, evaluation }: Props) {
         {power && (
           <p className={css.quiet}>
             {power.words}
-            {' It hangs from the top of the drawing, highest density lowest.'}
+            {
+              ' The faint area that hangs from the top is its density: the lower it reaches, the more of the signal lies there.'
+            }
           </p>
         )}
       </div>
