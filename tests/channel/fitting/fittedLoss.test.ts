@@ -21,6 +21,8 @@ describe('a fitted loss', () => {
     expect([fitted.hz[0], fitted.hz.at(-1), fitted.deviation.length]).toEqual([1e9, 10e9, 91])
     expect(fitted.at(5.05e9)).toBeCloseTo(smooth(5.05e9), 10)
     expect([fitted.at(0.99e9), fitted.at(10.1e9)]).toEqual([null, null])
+    expect(fitted.at(1e9)).toBeCloseTo(smooth(1e9), 10)
+    expect(fitted.at(10e9)).toBeCloseTo(smooth(10e9), 10)
   })
 
   it('tells how far the loss strays: ±0.1 dB in turn, by hand', () => {
@@ -30,6 +32,23 @@ describe('a fitted loss', () => {
     expect(fitted.rippleDb).toBeGreaterThan(0.2)
     expect(fitted.rippleDb).toBeLessThan(0.23)
     expect(fitted.maxDb).toBeGreaterThan(0.1)
+  })
+
+  it('strays as far where the loss dips as where it peaks: the unweighted fit is linear in the loss', () => {
+    const strays = (by: number) => {
+      const loss = LOSS.slice()
+      loss[120] = (loss[120] as number) + by
+      return fitOf(GRID, loss, { form: 'four-term' })
+    }
+    const [peak, dip] = [strays(1), strays(-1)]
+    expect(peak.maxDb).toBeGreaterThan(0.9)
+    expect(dip.maxDb).toBeCloseTo(peak.maxDb, 10)
+    expect(dip.rippleDb).toBeCloseTo(peak.rippleDb, 10)
+  })
+
+  it('takes two points for each term', () => {
+    expect(fitOf(GRID, LOSS, { form: 'weighted', to: 0.8e9 }).hz.length).toBe(8)
+    expect(fitOf(GRID, LOSS, { form: 'three-term', from: 19.5e9 }).hz.length).toBe(6)
   })
 
   it('weighs a row by 10^(−IL/20): an outlier 60 dB down moves nothing (by hand, 4e-3 of the unweighted pull)', () => {
