@@ -22,7 +22,8 @@ export const AT_NYQUIST: Asked = { sweep: false, builds: 0 }
  * Pure: the same budget gives the same evaluation. Results per line are remembered by content, so that evaluating again after
  * one change costs little.
  * @param evidence the networks in the evidence files, by SHA-256, read beforehand
- * @param asked how much beside the verdicts is wanted; verdicts and flags are the same whatever is asked
+ * @param asked how much beside the verdicts is wanted; verdicts and flags are the same whatever is asked, but that a cascade
+ *   which was not asked for is not held against the sum
  */
 export function evaluate(budget: Budget, evidence: EvidenceData, asked: Asked = AT_NYQUIST): Evaluation {
   const items = lineItems(budget, evidence)

@@ -207,6 +207,13 @@ describe('what takes part in the cascade', () => {
     expect(beyond.curve?.missed).toMatchObject({ worstDb: expect.closeTo(21, 6) })
   })
 
+  it('data that begin above a quarter of the frequency are no band', () => {
+    const from = (share: number) => Float64Array.from(GRID.filter((hz) => hz >= share * 10e9))
+    const late = { ...FILES, a: constantly(from(0.26), () => step(0.2)) }
+    expect(whole(late, ENDS).channel.withoutBand).toEqual(['a'])
+    expect(whole({ ...FILES, a: constantly(from(0.24), () => step(0.2)) }, ENDS).channel.withoutBand).toEqual([])
+  })
+
   it('nothing passes or comes back: unknown, never Infinity or a passed floor', () => {
     const through = whole({ a: constantly(GRID, () => attenuator(3)) }, { a: fileLine('a1', 'a') }).channel
     expect(through.returnLoss).toMatchObject({ whole: true, atNyquistDb: null, worstDb: null })

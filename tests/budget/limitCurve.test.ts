@@ -57,6 +57,12 @@ describe('a limit curve against the cascade (straight lines, by hand)', () => {
     expect(judged({ curve: '0.05..6 GHz: 3.1; 14..20 GHz: 10.5' }, DATA, ONE).verdict).toBe('inside')
   })
 
+  it('a piece between two samples of the sweep is judged at its ends', () => {
+    const found = judged({ curve: '0.05..9.9961 GHz: 30; 9.9962..9.9963 GHz: 3; 9.9964..20 GHz: 30' }, DATA, ONE)
+    expect([...GRID].some((hz) => hz > 9.9961e9 && hz < 9.9964e9)).toBe(false)
+    expect(found.reasons).toEqual([expect.stringMatching(/^limit curve missed by 2\.00 dB at 9\.9963 GHz/)])
+  })
+
   it('is unknown where a line has no data over the band', () => {
     const found = judged({ curve: '0.05..20 GHz: 30' }, DATA, { lines: { ...ONE.lines, b: line('a2', '1 dB') } })
     expect(found).toMatchObject({ verdict: 'inside', words: 'inside at Nyquist; limit curve unknown' })

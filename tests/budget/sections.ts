@@ -15,6 +15,8 @@ export type Section = {
 }
 
 type Complex = readonly [re: number, im: number]
+const ONE: Complex = [1, 0]
+const NONE: Complex = [0, 0]
 const add = ([a, b]: Complex, [c, d]: Complex): Complex => [a + c, b + d]
 const mul = ([a, b]: Complex, [c, d]: Complex): Complex => [a * c - b * d, a * d + b * c]
 const over = ([a, b]: Complex, [c, d]: Complex): Complex => {
@@ -38,21 +40,16 @@ export function scattering(
   hz: number,
   reference: number,
 ): readonly [Complex, Complex, Complex, Complex] {
-  let [a, b, c, d]: readonly Complex[] = [
-    [1, 0],
-    [0, 0],
-    [0, 0],
-    [1, 0],
-  ]
+  let [A, B, C, D]: readonly [Complex, Complex, Complex, Complex] = [ONE, NONE, NONE, ONE]
   for (const section of sections) {
     const [p, q, r, s] = abcdOf(section, hz)
-    const [A, B, C, D] = [a ?? [1, 0], b ?? [0, 0], c ?? [0, 0], d ?? [1, 0]] as const
-    a = add(mul(A, p), mul(B, r))
-    b = add(mul(A, q), mul(B, s))
-    c = add(mul(C, p), mul(D, r))
-    d = add(mul(C, q), mul(D, s))
+    ;[A, B, C, D] = [
+      add(mul(A, p), mul(B, r)),
+      add(mul(A, q), mul(B, s)),
+      add(mul(C, p), mul(D, r)),
+      add(mul(C, q), mul(D, s)),
+    ]
   }
-  const [A, B, C, D] = [a ?? [1, 0], b ?? [0, 0], c ?? [0, 0], d ?? [1, 0]] as const
   const [bn, cn] = [times(1 / reference, B), times(reference, C)]
   const below = add(add(A, bn), add(cn, D))
   const minus = (one: Complex) => times(-1, one)

@@ -12,7 +12,7 @@ const SEED = 1
 /**
  * Random builds of the link between an allowance's planes, in its judged corner, all lanes of each.
  * @param lane any lane of the span, for which lines count and with which sign
- * @returns null where none were asked for, and where a line has no number in some lane
+ * @returns null where none were asked for, and where a line has no number in some lane, or none in the corner
  */
 export function buildsOf(
   context: Context,
@@ -62,8 +62,12 @@ function buildLine(
   return common && { ...common, id: own.id, group: groupOf(own), sign, lanes }
 }
 
-function variationOf({ nominal, random, computed }: LineLoss, hz: number, reference: number | null): Variation | null {
-  if (nominal === null) return null
+function variationOf(
+  { nominal, random, computed, cornerUnknown }: LineLoss,
+  hz: number,
+  reference: number | null,
+): Variation | null {
+  if (nominal === null || cornerUnknown !== null) return null
   const { minusDb, plusDb, meaning, spreadDb, varied, times } = random
   const plain = { nominalDb: nominal, minusDb, plusDb, meaning, spreadDb, response: null }
   if (varied.length === 0 || computed === null || reference === null) return plain

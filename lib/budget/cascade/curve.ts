@@ -1,6 +1,7 @@
-import { type LimitCurve, limitAt, worstAgainst } from '../../channel/limits'
+import { type CurveMiss, type LimitCurve, limitAt, worstAgainst } from '../../channel/limits'
 import type { CurveEvaluation } from '../evaluation'
 import { reaches } from './grid'
+import { valueAt } from './overGrid'
 
 /**
  * Holds the cascade's loss against a limit curve. What is joined may miss it even while lines lack data; where nothing passes, or
@@ -17,10 +18,13 @@ export function judgeCurve(
 ): CurveEvaluation {
   const known = (_: number, k: number) => Number.isFinite(lossDb[k])
   const at = hz.filter(known)
-  const missed = worstAgainst(
-    curve,
-    at,
-    lossDb.filter(known).map((db) => db + held),
+  const missed = worse(
+    worstAgainst(
+      curve,
+      at,
+      lossDb.filter(known).map((db) => db + held),
+    ),
+    atEnds(curve, hz, lossDb, held),
   )
   return {
     whole: complete && at.length === hz.length && reaches(hz, curve.from, curve.to),
@@ -30,6 +34,29 @@ export function judgeCurve(
       worstDb: missed.worstDb,
       worstAtHz: missed.worstAtHz,
     },
+  }
+}
+
+/** Between two samples a piece of the curve may begin and end. */
+function atEnds(curve: LimitCurve, hz: Float64Array, lossDb: Float64Array, held: number): CurveMiss | null {
+  const ends = curve.pieces.flatMap(({ fromHz, toHz }) => [fromHz, toHz])
+  const known = ends.flatMap((end) => {
+    const db = valueAt(hz, lossDb, end)
+    return db === null ? [] : [{ end, db: db + held }]
+  })
+  return worstAgainst(
+    curve,
+    known.map(({ end }) => end),
+    known.map(({ db }) => db),
+  )
+}
+
+function worse(a: CurveMiss | null, b: CurveMiss | null): CurveMiss | null {
+  if (a === null || b === null) return a ?? b
+  return {
+    ...(b.worstDb > a.worstDb ? b : a),
+    missedFromHz: Math.min(a.missedFromHz, b.missedFromHz),
+    missedToHz: Math.max(a.missedToHz, b.missedToHz),
   }
 }
 
