@@ -47,7 +47,7 @@ export function toleranceOf(line: Line, lossClass: LossClass | null): Tolerance 
 export type ToleranceDb = { readonly minusDb: number; readonly plusDb: number; readonly meaning: Meaning }
 
 /**
- * @param nominal dB that a tolerance in % is of
+ * @param nominal dB that a tolerance in % is of; below zero of a file that amplifies, whose tolerance is no less one
  * @param uncertainty share of the loss that the model may be off, read as a limit; counts where nobody states a tolerance
  * @returns the tolerance in dB, or the field whose text cannot be read
  */
@@ -56,9 +56,10 @@ export function toleranceDb(
   nominal: number,
   uncertainty: number,
 ): ToleranceDb | 'toleranceMinus' | 'tolerancePlus' {
-  if (tolerance === null) return { minusDb: uncertainty * nominal, plusDb: uncertainty * nominal, meaning: 'limit' }
-  const minusDb = decibels(tolerance.minus ?? tolerance.plus, nominal)
-  const plusDb = decibels(tolerance.plus ?? tolerance.minus, nominal)
+  const size = Math.abs(nominal)
+  if (tolerance === null) return { minusDb: uncertainty * size, plusDb: uncertainty * size, meaning: 'limit' }
+  const minusDb = decibels(tolerance.minus ?? tolerance.plus, size)
+  const plusDb = decibels(tolerance.plus ?? tolerance.minus, size)
   if (minusDb === null) return 'toleranceMinus'
   if (plusDb === null) return 'tolerancePlus'
   return { minusDb, plusDb, meaning: tolerance.meaning }

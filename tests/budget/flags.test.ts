@@ -18,7 +18,7 @@ const planes = (from: object, to: object) => ({
   planes: { tx: { ...PLANES.tx, ...from }, rx: { ...PLANES.rx, ...to } },
 })
 
-/** Flags that need the contents of a file, and the test that raises them. */
+/** Flags that need the contents of a file or a whole drawing, and the test that raises them. */
 const ELSEWHERE = {
   'delay-longer-than-length': 'mistakes/d2',
   'loss-at-low-end': 'mistakes/d2',
@@ -27,6 +27,8 @@ const ELSEWHERE = {
   'renormalised-differs': 'mistakes/d5',
   'port-pairs-doubtful': 'mistakes/d5',
   'evidence-not-read': 'network',
+  'nothing-passes': 'network',
+  'stub-resonance-near': 'models/via',
   'evidence-unreadable': 'network',
   'port-map-missing': 'network',
   'port-map-unreadable': 'network',
@@ -106,18 +108,6 @@ const RAISED: Readonly<
     'lines',
     'a',
     'validTo',
-  ],
-  'nothing-passes': [
-    a({
-      kind: 'component',
-      model: 'ac-capacitor',
-      capacitance: '100 nF',
-      resistance: '10000 Ω',
-      padCapacitance: '1 nF',
-    }),
-    'lines',
-    'a',
-    'model',
   ],
   'evidence-missing': [a({ model: 'network', taken: 'discrete' }), 'lines', 'a', 'evidence'],
   'varies-not-used': [a({ varies: 'width 10 %' }), 'lines', 'a', 'varies'],

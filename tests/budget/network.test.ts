@@ -91,6 +91,14 @@ describe('a network taken as a discrete (ABCD matrices, computed once more in th
     expect([above.db, above.flags]).toEqual([null, ['outside-validity evidence']])
   })
 
+  it('that lets nothing through has no number', () => {
+    const closed = network(2, GRID, new Float64Array(8 * GRID.length), 100)
+    expect(count({ a: { network: closed } })).toMatchObject({
+      db: null,
+      flags: expect.arrayContaining(['nothing-passes model']),
+    })
+  })
+
   it('counts nothing without its file, and says what is wrong with it', () => {
     const none = evidenceOf({}).read
     expect(none.size).toBe(0)

@@ -91,6 +91,13 @@ describe('what the head says about the rate', () => {
     })
     const evaluation = evaluate(budget, new Map())
     expect(evaluation.allowances[0]).toMatchObject({ verdict: 'inside', words: 'inside at 10 GHz', knownDb: 2 })
-    expect(evaluation.lines.a?.loss).toEqual({ atHz: null, nominalDb: null, lowDb: null, highDb: null, by: null, beside: [] })
+    expect(evaluation.lines.a?.loss).toEqual({
+      atHz: null,
+      nominalDb: null,
+      lowDb: null,
+      highDb: null,
+      by: null,
+      beside: [],
+    })
   })
 })

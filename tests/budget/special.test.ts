@@ -73,10 +73,7 @@ describe('a reserve', () => {
     const lines = { a: line('a1', '4 dB'), r: reserve('temperature') }
     expect(run({ lines })).toMatchObject({ allowance: { lossDb: 5 }, codes: [] })
     const hot = { limit: { ...base, order: 'a0', judgedCorner: 'hot' } }
-    expect(run({ lines, corners, allowances: hot }).codes).toEqual([
-      'reserve-and-corner r',
-      'corner-does-not-move a',
-    ])
+    expect(run({ lines, corners, allowances: hot }).codes).toEqual(['reserve-and-corner r', 'corner-does-not-move a'])
     const rss = { limit: { ...base, order: 'a0', judgedStatistic: 'rss' } } as const
     expect(run({ lines: { ...lines, r: reserve('process') }, allowances: rss }).codes).toEqual(['reserve-and-corner r'])
     expect(run({ lines: { ...lines, r: reserve('growth') }, allowances: rss, corners }).codes).toEqual([])

@@ -43,7 +43,7 @@ describe.skipIf(!isThere(...FILES))(`fixtures of a simulated pair (${WHEN_THERE}
     if ('reason' in found) throw new Error(found.reason)
     const { db, degrees, reflection } = worstErrors(found, mode('diff_dut.s4p', which), ghz * 1e9)
     const reached = [db, degrees, reflection]
-    for (const [k, bound] of bounds.entries()) {
+    for (const [k, bound] of (bounds as readonly number[]).entries()) {
       expect(reached[k]).toBeLessThan(bound)
       // A bound far above what is reached would say nothing.
       expect(reached[k]).toBeGreaterThan(0.8 * bound)

@@ -104,7 +104,7 @@ test('a file that is no budget is refused with the place of each mistake', async
 test('evaluating a file keeps nothing of it', async () => {
   const before = await call(listBudgets, by(owner))
   const { json } = await call(evaluateBudget, { json: LINK, headers: { cookie: ada.cookie } })
-  expect(json).toEqual(evaluate(LINK, new Map()))
+  expect(json).toEqual(evaluate(LINK, new Map(), WHOLE))
   expect((await call(listBudgets, by(owner))).json).toEqual(before.json)
 })
 

@@ -7,7 +7,7 @@ import { thinCoupledStripline, thinStripline } from '../../../lib/channel/lines/
 import { centredStripline } from '../../../lib/channel/lines/stripline/thickStripline'
 import { crossSection, type Structure, structureRange } from '../../../lib/channel/lines/structures'
 import { cannonball, SMOOTH } from '../../../lib/channel/materials/roughness'
-import { widebandDebye } from '../../../lib/channel/materials/widebandDebye'
+import { dfAt, dkAt, widebandDebye } from '../../../lib/channel/materials/widebandDebye'
 
 const MIL = 25.4e-6
 const SIZE = { width: 5 * MIL, gap: 6 * MIL, thickness: 0.6 * MIL, below: 5 * MIL, above: 7 * MIL }
@@ -30,6 +30,54 @@ describe('A line over frequency', () => {
     }
     const first = (section.airImpedance * section.conductors) / Math.sqrt(1 + section.fill * 2.6)
     expect((line.zRe[0] as number) / first).toBeCloseTo(1, 6)
+  })
+
+  it.each(['microstrip', 'coupled-microstrip'] as const)(
+    '%s: its impedance rises with its permittivity by √(εe(0)/εe)·(εe − 1)/(εe(0) − 1) (Hammerstad and Jensen 1980)',
+    (structure) => {
+      const section = crossSection(structure, SIZE, 3.6)
+      const perfect = { conductivity: 1e36, roughness: SMOOTH }
+      const line = propagate(section, widebandDebye(3.6, 0, 1e10), perfect, HZ)
+      const still = 1 + section.fill * 2.6
+      for (const [i, hz] of HZ.entries()) {
+        const e = (((line.beta[i] as number) * 299792458) / (2 * Math.PI * hz)) ** 2
+        const rise = (line.zRe[i] as number) / (line.zRe[0] as number)
+        expect(rise / ((Math.sqrt(still / e) * (e - 1)) / (still - 1))).toBeCloseTo(1, 6)
+      }
+      expect(line.zRe.at(-1)).toBeGreaterThan(1.01 * (line.zRe[0] as number))
+    },
+  )
+
+  it.each(['stripline', 'coupled-stripline'] as const)(
+    '%s with losses: γ/Z is ωC·tan δ + jωC, C of its impedance in air and the laminate (telegrapher’s equations)',
+    (structure) => {
+      const section = crossSection(structure, SIZE, 3.6)
+      const laminate = widebandDebye(3.6, 0.02, 1e10)
+      const line = propagate(section, laminate, copper, HZ)
+      for (const [i, hz] of HZ.entries()) {
+        const [alpha, beta] = [line.alpha[i] as number, line.beta[i] as number]
+        const [zRe, zIm] = [(line.zRe[i] as number) / section.conductors, (line.zIm[i] as number) / section.conductors]
+        const size = zRe * zRe + zIm * zIm
+        const susceptance = (beta * zRe - alpha * zIm) / size
+        const dk = dkAt(laminate, hz)
+        expect(susceptance / ((2 * Math.PI * hz * dk) / (299792458 * section.airImpedance))).toBeCloseTo(1, 10)
+        expect((alpha * zRe + beta * zIm) / size / susceptance).toBeCloseTo(dfAt(laminate, hz, dk), 10)
+      }
+    },
+  )
+
+  it('in air loses only in its conductors and is as fast as light', () => {
+    const section = { ...crossSection('stripline', SIZE, 3.6), fill: 0 }
+    for (const [one, laminate] of [
+      [crossSection('stripline', SIZE, 1), widebandDebye(1, 0, 1e10)],
+      [section, widebandDebye(3.6, 0.02, 1e10)],
+    ] as const) {
+      const line = propagate(one, laminate, copper, Float64Array.of(20e9))
+      expect(line.dielectric[0]).toBe(0)
+      expect(line.alpha[0]).toBeGreaterThan(0)
+      // The inductance inside the copper slows it by X/(2ωL).
+      expect((line.beta[0] as number) / ((2 * Math.PI * 20e9) / 299792458)).toBeCloseTo(1, 1)
+    }
   })
 
   it.each(STRUCTURES)(

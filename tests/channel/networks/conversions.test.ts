@@ -72,6 +72,18 @@ describe('conversions at complex references of each port', () => {
     expect(fromImpedance(hz, Float64Array.of(-50, 0), reference)).toEqual({ reason })
   })
 
+  it('names the first frequency without one', () => {
+    const [through, line] = [
+      [0, 0, 1, 0, 1, 0, 0, 0],
+      [0, 0, Math.cos(1), -Math.sin(1), Math.cos(1), -Math.sin(1), 0, 0],
+    ]
+    const reasonOf = (...points: readonly (readonly number[])[]) =>
+      impedanceOf(network(2, Float64Array.of(1e9, 2e9, 3e9), Float64Array.from(points.flat()), 50))
+    expect(reasonOf(line, through, through)).toEqual({ reason: 'At 2 GHz the network has no impedance matrix.' })
+    expect(reasonOf(through, line, through)).toEqual({ reason: 'At 1 GHz the network has no impedance matrix.' })
+    expect(reasonOf(line, line, line)).toHaveLength(24)
+  })
+
   it('takes no other number of ports for a T matrix', () => {
     expect(() => transferOf(network(1, Float64Array.of(1), Float64Array.of(0, 0), 50))).toThrow(RangeError)
   })
@@ -132,9 +144,13 @@ describe('renormalisation', () => {
   it('changes nothing where the reference is the same, and refuses one without positive real part', () => {
     const given: Network = network(1, Float64Array.of(1e9), Float64Array.of(0.5, 0), 50)
     expect(renormalise(given, 50)).toBe(given)
-    expect(() => renormalise(given, 0)).toThrow(RangeError)
-    expect(() => renormalise(given, Number.NaN)).toThrow(RangeError)
-    expect(() => renormalise(given, Float64Array.of(50, 0, 50, 0))).toThrow(RangeError)
+    const refused = new RangeError('A reference must have a positive real part.')
+    expect(() => renormalise(given, 0)).toThrow(refused)
+    expect(() => renormalise(given, Number.NaN)).toThrow(refused)
+    for (const own of [0, -50]) {
+      expect(() => renormalise(network(1, given.hz, given.s, own), 50)).toThrow(refused)
+    }
+    expect(() => renormalise(given, Float64Array.of(50, 0, 50, 0))).toThrow(new RangeError('2 references for 1 ports.'))
   })
 
   it('is not a number at a frequency where an active network has no such waves, and right at the others', () => {
