@@ -19,7 +19,7 @@ export function cascade(chain: readonly Float64Array[], count: number): Float64A
     if (samples.length < whole.length)
       throw new RangeError(`A two-port of ${samples.length / TWO_PORT} frequencies in a chain of ${count}.`)
   const [first, ...rest] = chain
-  if (first) whole.set(first.length === whole.length ? first : first.subarray(0, whole.length))
+  if (first) whole.set(first.subarray(0, whole.length))
   else for (let k = 0; k < whole.length; k += TWO_PORT) whole[k + 2] = whole[k + 4] = 1
   for (const next of rest) joinInto(whole, next, count)
   return whole
@@ -32,7 +32,7 @@ export function cascade(chain: readonly Float64Array[], count: number): Float64A
  * @param a 8 numbers a frequency, overwritten
  * @param b 8 numbers a frequency
  */
-export function joinInto(a: Float64Array, b: Float64Array, count: number): void {
+function joinInto(a: Float64Array, b: Float64Array, count: number): void {
   const end = TWO_PORT * count
   for (let k = 0; k < end; k += TWO_PORT) {
     const a12r = a[k + 2] as number
