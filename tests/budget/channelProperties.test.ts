@@ -237,36 +237,42 @@ describe('what is remembered', () => {
     expect(JSON.stringify(evaluate(parsed(), missing, FULL))).toBe(third)
   })
 
-  it('two allowances at other frequencies, and one whose corner cannot be judged, do not lend each other their cascades', () => {
-    const extreme = { order: 'a1', name: 'Extreme', fabrication: 'high-loss', temperature: '65 °C' } as const
-    const allowance = { ...link({}).allowances.limit, judgedCorner: 'extreme' }
-    const planes = { ...link({}).planes, mid: { order: 'a35', code: 'board-edge', name: 'Edge' } } as const
-    const several = (budget: BudgetFile) =>
-      Object.assign(budget, {
-        corners: { extreme },
-        planes,
-        // A stated trace cannot be judged there without a growth per kelvin; a connector's tolerance in dB is another share of its loss at 5 GHz.
-        lines: {
-          ...budget.lines,
-          t: fileLine('a3', 'b', { kind: 'connector', tolerancePlus: '0.2 dB' }),
-          x: line('a4', '1 dB', { kind: 'trace' }),
-        },
-        allowances: {
-          far: { ...allowance, order: 'a0' },
-          near: { ...allowance, order: 'a1', to: 'mid' },
-          low: { ...allowance, order: 'a2', to: 'mid', at: '5 GHz' },
-        },
-      } satisfies Partial<BudgetFile>)
-    const only = (id: string) => (budget: BudgetFile) => {
-      several(budget)
-      budget.allowances = Object.fromEntries(Object.entries(budget.allowances ?? {}).filter(([own]) => own === id))
-    }
-    const together = fresh(parsed(several), base.read).allowances
-    for (const id of ['far', 'near', 'low']) {
-      const alone = fresh(parsed(only(id)), base.read).allowances[0]
-      expect(together.find((one) => one.id === id)?.channel).toEqual(alone?.channel)
-      expect(alone?.channel).not.toBeNull()
-    }
-    expect(together.map(({ lossDb }) => lossDb === null)).toEqual([true, false, false])
-  })
+  it.each([
+    { temperature: '65 °C', fabrication: 'high-loss' },
+    { temperature: '65 °C', dielectricPerKelvin: '0.2 %/K' },
+  ] as const)(
+    'allowances at other frequencies, and one whose corner %j cannot be judged, do not lend each other their cascades',
+    (conditions) => {
+      const corners = { other: { order: 'a1', name: 'Other', ...conditions } }
+      const allowance = { ...link({}).allowances.limit, judgedCorner: 'other' }
+      const planes = { ...link({}).planes, mid: { order: 'a35', code: 'board-edge', name: 'Edge' } } as const
+      const several = (budget: BudgetFile) =>
+        Object.assign(budget, {
+          corners,
+          planes,
+          // A stated trace cannot be judged there without a growth per kelvin; a connector's tolerance in dB is another share of its loss at 5 GHz.
+          lines: {
+            ...budget.lines,
+            t: fileLine('a3', 'b', { kind: 'connector', tolerancePlus: '0.2 dB' }),
+            x: line('a4', '1 dB', { kind: 'trace' }),
+          },
+          allowances: {
+            far: { ...allowance, order: 'a0' },
+            near: { ...allowance, order: 'a1', to: 'mid' },
+            low: { ...allowance, order: 'a2', to: 'mid', at: '5 GHz' },
+          },
+        } satisfies Partial<BudgetFile>)
+      const only = (id: string) => (budget: BudgetFile) => {
+        several(budget)
+        budget.allowances = Object.fromEntries(Object.entries(budget.allowances ?? {}).filter(([own]) => own === id))
+      }
+      const together = fresh(parsed(several), base.read).allowances
+      for (const id of ['far', 'near', 'low']) {
+        const alone = fresh(parsed(only(id)), base.read).allowances[0]
+        expect(together.find((one) => one.id === id)?.channel).toEqual(alone?.channel)
+        expect(alone?.channel).not.toBeNull()
+      }
+      expect(together.map(({ lossDb }) => lossDb === null)).toEqual([true, false, false])
+    },
+  )
 })

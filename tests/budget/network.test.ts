@@ -122,6 +122,9 @@ describe('a network taken as a discrete (ABCD matrices, computed once more in th
     const gain = count({ a: constantly(GRID, () => attenuator(-1)) })
     expect(gain.flags).toContain('not-passive evidence')
     expect(gain.db).toBeCloseTo(-1, 10)
+    // A tolerance in % of it is no less one.
+    const varied = count({ a: constantly(GRID, () => attenuator(-1)) }, { line: { tolerancePlus: '5 %' } })
+    expect(varied.allowance?.worstDb).toBeCloseTo(-0.95, 10)
     const wide = steps(1e9, 20)
     const turning: Section = { ohm: 100, delay: 480e-12, db: (hz) => 0.3 * Math.sqrt(hz / 1e9) }
     expect(count({ a: fileOf([turning], wide) }).flags).toContain('coarse-file evidence')
