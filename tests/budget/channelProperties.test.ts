@@ -43,9 +43,9 @@ describe('any budget, with computed lines, files, curves, floors, corners and bu
           if (channel?.curve) judged++
         }
       }),
-      { numRuns: 100 },
+      { numRuns: 60 },
     )
-    expect([swept > 20, judged > 5]).toEqual([true, true])
+    expect([swept > 10, judged > 3]).toEqual([true, true])
   })
 
   it('budgets evaluated in any order give what each gives alone', () => {
@@ -57,7 +57,7 @@ describe('any budget, with computed lines, files, curves, floors, corners and bu
         expect(forth).toEqual(alone)
         expect(back.reverse()).toEqual(alone)
       }),
-      { numRuns: 15 },
+      { numRuns: 8 },
     )
   })
 
@@ -69,7 +69,7 @@ describe('any budget, with computed lines, files, curves, floors, corners and bu
         const after = evaluate({ ...budget, lines: { ...budget.lines, extra: added } } as Budget, ANY_EVIDENCE)
         for (const id of Object.keys(before.lines)) expect(after.lines[id]).toEqual(before.lines[id])
       }),
-      { numRuns: 40 },
+      { numRuns: 20 },
     )
   })
 })
