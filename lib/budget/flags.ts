@@ -89,6 +89,7 @@ export const FLAGS = {
   'port-map-doubtful': ['warning', 'The ports of a file were taken by a doubtful guess.'],
   'fixtures-differ': ['warning', 'Fixtures have another impedance than the thru that they are removed by.'],
   'not-passive': ['warning', 'A file gives out more than it takes in.'],
+  'not-reciprocal': ['warning', 'A file loses differently in its two directions.'],
   'coarse-file': ['warning', 'The points of a file lie far apart.'],
   'fit-differs': ['warning', 'The fitted loss and the loss at the frequency differ.'],
   'other-conditions': ['notice', 'A number holds in other conditions than the reference corner.'],
@@ -107,6 +108,7 @@ export const FLAGS = {
   'varies-not-used': ['notice', 'What varies is not read by the model of its line.'],
   'count-not-used': ['notice', 'How many alike is not used by this model.'],
   'skew-adds': ['notice', 'Skew of several lines may add up to more than its parts.'],
+  'not-causal': ['notice', 'The phase of a file mostly turns backwards.'],
   'port-map-guessed': ['notice', 'The ports of a file were found at low frequency.'],
 } as const satisfies Record<string, readonly [Severity, string]>
 

@@ -28,6 +28,8 @@ const ELSEWHERE = {
   'port-pairs-doubtful': 'mistakes/d5',
   'evidence-not-read': 'network',
   'nothing-passes': 'network',
+  'not-reciprocal': 'network',
+  'not-causal': 'network',
   'stub-resonance-near': 'models/via',
   'evidence-unreadable': 'network',
   'port-map-missing': 'network',

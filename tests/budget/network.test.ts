@@ -91,6 +91,19 @@ describe('a network taken as a discrete (ABCD matrices, computed once more in th
     expect([above.db, above.flags]).toEqual([null, ['outside-validity evidence']])
   })
 
+  it('reversed in time, or lossy one way only, says so (IEEE 370 metrics)', () => {
+    const read = fileOf([SECTION], GRID, 85)
+    if (!read || !('network' in read)) throw new Error('no network')
+    const reversed = { ...read.network, s: read.network.s.map((part, at) => (at % 2 === 1 ? -part : part)) }
+    expect(count({ a: read }).flags).toEqual([])
+    expect(count({ a: { network: reversed } }).flags).toContain('not-causal evidence')
+    const oneWay = {
+      ...read.network,
+      s: read.network.s.map((part, at) => (at % 8 === 2 || at % 8 === 3 ? part / 2 : part)),
+    }
+    expect(count({ a: { network: oneWay } }).flags).toContain('not-reciprocal evidence')
+  })
+
   it('that lets nothing through has no number', () => {
     const closed = network(2, GRID, new Float64Array(8 * GRID.length), 100)
     expect(count({ a: { network: closed } })).toMatchObject({

@@ -7,7 +7,7 @@ import type { Piece } from '../piece'
 import { insertionAt, insertionOver, sampled } from './samples'
 
 /** Hz: where the band of a fit begins (design rule of the comparison of sum and cascade). */
-export const FIT_FROM = 0.05e9
+const FIT_FROM = 0.05e9
 /** Fitted and point value may differ by this much before it is said. */
 const DIFFERS_DB = 0.2
 
@@ -15,11 +15,7 @@ const DIFFERS_DB = 0.2
 export function longUniform(input: ModelInput, own: Network): Piece | null {
   const { fields, reference, symbolRate } = input
   const lossDb = reference === null ? insertionLoss(own.s) : insertionOver(own, reference)
-  const fit = fittedLoss(own.hz, lossDb, {
-    form: 'weighted',
-    from: FIT_FROM,
-    to: symbolRate ?? Number.POSITIVE_INFINITY,
-  })
+  const fit = fittedLoss(own.hz, lossDb, { form: 'weighted', ...bandWithin(own.hz, symbolRate) })
   if ('reason' in fit) {
     return fields.say(
       'not-fitted',
@@ -40,6 +36,18 @@ export function longUniform(input: ModelInput, own: Network): Piece | null {
     uncertainty: 0,
     beside: (at) => [{ what: 'point', db: insertionAt(own, at) }],
     measured: own,
+  }
+}
+
+/** From 0.05 GHz to the symbol rate, out to the next point of the file at each end, so that the fit reaches both. */
+export function bandWithin(
+  hz: Float64Array,
+  symbolRate: number | null,
+): { readonly from: number; readonly to: number } {
+  const reaches = symbolRate ?? Number.POSITIVE_INFINITY
+  return {
+    from: hz.findLast((f) => f <= FIT_FROM) ?? 0,
+    to: hz.find((f) => f >= reaches) ?? Number.POSITIVE_INFINITY,
   }
 }
 

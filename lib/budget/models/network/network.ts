@@ -1,8 +1,7 @@
-import { fixtureImpedances, removeFixtures } from '../../../channel/fixtures'
 import type { Network } from '../../../channel/networks/network'
-import type { Refusal } from '../../../channel/networks/refusal'
 import type { Model, ModelInput } from '../model'
 import type { Computed, Piece } from '../piece'
+import { aloneOf } from './alone'
 import { longUniform } from './longUniform'
 import { perLengthOf } from './perLength'
 import { sayQuality } from './quality'
@@ -35,25 +34,17 @@ function withoutFixtures(input: ModelInput, file: Network): Network | null {
   if (line.fixture === null) return file
   const fixtures = twoPortOf(input, 'fixture')
   if (fixtures === null) return null
-  const removed = alone(input, file, fixtures)
-  if (!('reason' in removed)) return removed
-  return fields.say(
-    'fixtures-not-removed',
-    'fixture',
-    `${fields.name}: its fixtures could not be removed.`,
-    removed.reason,
-  )
-}
-
-/** Fixtures whose impedance differs by more than this from that of their thru are corrected for it. */
-const DIFFERS = 0.03
-
-function alone({ fields }: ModelInput, file: Network, fixtures: Network): Network | Refusal {
-  const found = fixtureImpedances(file, fixtures)
-  if ('reason' in found) return found
-  const { thru, near, far } = found
-  const impedanceCorrection = Math.max(Math.abs(near / thru - 1), Math.abs(far / thru - 1)) > DIFFERS
-  if (impedanceCorrection) {
+  const { device, differ } = aloneOf(file, fixtures)
+  if ('reason' in device) {
+    return fields.say(
+      'fixtures-not-removed',
+      'fixture',
+      `${fields.name}: its fixtures could not be removed.`,
+      device.reason,
+    )
+  }
+  if (differ !== null) {
+    const { thru, near, far } = differ
     fields.say(
       'fixtures-differ',
       'fixture',
@@ -61,7 +52,7 @@ function alone({ fields }: ModelInput, file: Network, fixtures: Network): Networ
       'Measure a thru on the same board, if there is one.',
     )
   }
-  return removeFixtures(file, fixtures, { impedanceCorrection })
+  return device
 }
 
 /** Counts −20 log10|S21| in the budget's reference; beside it what the file says in its own. */

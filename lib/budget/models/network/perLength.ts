@@ -4,7 +4,7 @@ import { TWO_PORT } from '../../../channel/networks/network'
 import { LENGTH } from '../../quantities'
 import type { ModelInput } from '../model'
 import type { Computed, Piece } from '../piece'
-import { FIT_FROM } from './longUniform'
+import { bandWithin } from './longUniform'
 import { sayQuality } from './quality'
 import { twoPortOf } from './twoPortOf'
 
@@ -33,11 +33,7 @@ export function perLengthOf(input: ModelInput): Computed | null {
     )
   }
   const perMetre = found.alpha.map((nepers) => nepers * DB_PER_NEPER)
-  const fit = fittedLoss(found.hz, perMetre, {
-    form: 'weighted',
-    from: FIT_FROM,
-    to: symbolRate ?? Number.POSITIVE_INFINITY,
-  })
+  const fit = fittedLoss(found.hz, perMetre, { form: 'weighted', ...bandWithin(found.hz, symbolRate) })
   if ('reason' in fit) {
     return fields.say('not-fitted', 'evidence', `${fields.name}: its loss per length cannot be fitted.`, fit.reason)
   }

@@ -1,9 +1,10 @@
-import { differentialTwoPort, guessPortMap, parsePortMap } from '../../../channel/networks'
+import { differentialTwoPort, formatPortMap, guessPortMap, type PortMap, parsePortMap } from '../../../channel/networks'
 import type { Network } from '../../../channel/networks/network'
 import { RESISTANCE, typedValue } from '../../quantities'
 import { livingRecord, nameOf } from '../../record'
 import type { RecordOf } from '../../schema'
 import type { ModelInput } from '../model'
+import { rememberedOf } from './remembered'
 
 type EvidenceRecord = RecordOf<'evidence'>
 type Field = 'evidence' | 'fixture' | 'shortEvidence'
@@ -52,19 +53,29 @@ function chosen(input: ModelInput, field: Field, record: EvidenceRecord, network
   }
   const map = mapOf(input, field, record, network)
   if (map === null) return null
-  const twoPort = differentialTwoPort(network, map)
-  if (map.from.length === 2 || record.modes === 'mixed-mode') return twoPort
-  const said = typedValue(RESISTANCE, record.reference)
-  if (record.modes === 'mixed-as-two-ports')
-    return said === null ? twoPort : { ...twoPort, reference: Float64Array.of(said, 0, said, 0) }
-  fields.say(
-    'single-ended-taken-as-differential',
-    field,
-    `${fields.name}: its file is single-ended; a pair of two such lines without coupling is taken, at twice the file's reference.`,
-    'Attach a file of the pair with four ports.',
-  )
-  return { ...twoPort, reference: twoPort.reference.map((part) => 2 * part) }
+  if (map.from.length === 1 && record.modes !== 'mixed-mode' && record.modes !== 'mixed-as-two-ports') {
+    fields.say(
+      'single-ended-taken-as-differential',
+      field,
+      `${fields.name}: its file is single-ended; a pair of two such lines without coupling is taken, at twice the file's reference.`,
+      'Attach a file of the pair with four ports.',
+    )
+  }
+  const key = `${formatPortMap(map)}|${record.modes}|${record.reference}`
+  return twoPorts(network, key, () => inModes(network, map, record))
 }
+
+const twoPorts = rememberedOf<Network>()
+
+function inModes(network: Network, map: PortMap, { modes, reference }: EvidenceRecord): Network {
+  const twoPort = differentialTwoPort(network, map)
+  if (map.from.length === 2 || modes === 'mixed-mode') return twoPort
+  if (modes !== 'mixed-as-two-ports') return { ...twoPort, reference: twoPort.reference.map((part) => 2 * part) }
+  const said = typedValue(RESISTANCE, reference)
+  return said === null ? twoPort : { ...twoPort, reference: Float64Array.of(said, 0, said, 0) }
+}
+
+const guesses = rememberedOf<ReturnType<typeof guessPortMap>>()
 
 function mapOf(input: ModelInput, field: Field, record: EvidenceRecord, network: Network) {
   const { fields, line } = input
@@ -80,7 +91,7 @@ function mapOf(input: ModelInput, field: Field, record: EvidenceRecord, network:
       map.reason,
     )
   }
-  const guess = guessPortMap(network)
+  const guess = guesses(network, '', () => guessPortMap(network))
   if (guess.map === null) {
     return fields.say(
       'port-map-missing',
