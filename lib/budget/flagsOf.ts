@@ -10,11 +10,10 @@ export type LineDraft = { readonly draft: FlagDraft; readonly lane: number | nul
 /** All flags of an evaluation, each said once, problems first. */
 export function flagsOf(checked: Checked, lineDrafts: readonly LineDraft[]): Flag[] {
   const { context, judged } = checked
-  const inSums = judged.flatMap(({ lanes }) =>
-    lanes.flatMap(({ lines }) =>
-      lines.flatMap(({ item, loss }) => loss.drafts.map((draft) => ({ draft, lane: item.lane }))),
-    ),
-  )
+  const inSums: LineDraft[] = []
+  for (const { lanes } of judged)
+    for (const { lines } of lanes)
+      for (const { item, loss } of lines) for (const draft of loss.drafts) inSums.push({ draft, lane: item.lane })
   const drafts = [
     ...context.signalling.drafts,
     ...acrossLanes([...lineDrafts, ...inSums]),

@@ -25,16 +25,24 @@ export function spanOf(context: Context, allowance: Allowance): Span {
   const ends = (['from', 'to'] as const).map((end) => missingPlane(context, allowance, end))
   const missing = ends.filter((problem) => problem !== null)
   if (missing.length > 0) return { from: null, to: null, items: [], problems: missing }
-  const start = context.rows.findIndex((row) => 'plane' in row && row.plane === allowance.from)
-  const end = context.rows.findIndex((row) => 'plane' in row && row.plane === allowance.to)
-  if (end <= start) return { from: null, to: null, items: [], problems: [reversed(end === start)] }
-  const between = new Set(context.rows.slice(start, end).flatMap((row) => ('line' in row ? [row.line] : [])))
-  const items = context.items.filter(({ id }) => between.has(id))
+  const [start, end] = [placeOf(context, allowance.from), placeOf(context, allowance.to)]
+  if (end.row <= start.row) return { from: null, to: null, items: [], problems: [reversed(end.row === start.row)] }
+  const items = context.items.slice(start.linesBefore, end.linesBefore)
   const differing = [
     differs(context, allowance.from, allowance.publishedFrom, 'from'),
     differs(context, allowance.to, allowance.publishedTo, 'to'),
   ].filter((problem) => problem !== null)
   return { from: allowance.from, to: allowance.to, items, problems: differing }
+}
+
+/** Where a plane stands among the rows, and how many lines come before it. */
+function placeOf({ rows }: Context, plane: string | null): { readonly row: number; readonly linesBefore: number } {
+  let linesBefore = 0
+  for (const [row, one] of rows.entries()) {
+    if ('plane' in one && one.plane === plane) return { row, linesBefore }
+    if ('line' in one) linesBefore++
+  }
+  return { row: -1, linesBefore }
 }
 
 function missingPlane({ budget }: Context, allowance: Allowance, end: 'from' | 'to'): SpanProblem | null {
