@@ -38,7 +38,10 @@ export const allowance = z.strictObject({
   judgedLane: integer(1, 256, 'Lane that it is judged at; empty: the worst.'),
   body: text(120, 'Body that publishes it.'),
   clause: text(200, 'Document and clause.'),
-  confidence: choice(CONFIDENCES, 'How sure the figure is: read there, two sources, from memory, or the own project.'),
+  confidence: choice(
+    CONFIDENCES,
+    'How sure the figure is: read in a source, two sources, from memory, or the own project.',
+  ),
   note,
 })
 

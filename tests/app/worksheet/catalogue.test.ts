@@ -102,7 +102,7 @@ describe('what is suggested for lines', () => {
       'IEEE 802.3, 802.3ck',
       'from memory',
     ])
-    expect(FOIL_ROWS[0]).toMatchObject({ figure: 'Rz 8 µm', facts: ['Rz 6 µm to 10 µm', 'read there'] })
+    expect(FOIL_ROWS[0]).toMatchObject({ figure: 'Rz 8 µm', facts: ['Rz 6 µm to 10 µm', 'read in a source'] })
   })
 })
 

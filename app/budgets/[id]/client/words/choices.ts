@@ -31,7 +31,7 @@ const WORDS: Readonly<Record<string, string>> = {
   'low-loss': 'low-loss extreme',
   'high-loss': 'high-loss extreme',
   // sources
-  read: 'read there',
+  read: 'read in a source',
   'two-sources': 'two sources',
   'from-memory': 'from memory',
   own: "the project's own",
