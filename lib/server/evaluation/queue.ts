@@ -56,14 +56,16 @@ export class EvaluationQueue implements Evaluator {
 
   async close(): Promise<void> {
     this.closed = true
-    for (const { reject } of [...this.urgent.splice(0), ...this.patient.splice(0)])
-      reject(new Error('The server stops.'))
-    await this.worker?.terminate()
+    const stops = new Error('The server stops.')
+    for (const { reject } of [...this.urgent.splice(0), ...this.patient.splice(0)]) reject(stops)
+    const { worker } = this
+    this.lost(stops)
+    await worker?.terminate()
   }
 
   private ask(budget: Budget, asked: Asked | null, files: boolean): Promise<Answer> {
+    if (this.closed) return Promise.reject(new Error('The server stops.'))
     return new Promise((resolve, reject) => {
-      if (this.closed) reject(new Error('The server stops.'))
       const queue = asked === null ? this.urgent : this.patient
       queue.push({ budget, asked, files, resolve, reject })
       this.next()
@@ -94,7 +96,12 @@ export class EvaluationQueue implements Evaluator {
     })
     worker.unref()
     worker.on('message', (answer: Answer) => this.answered(answer))
-    worker.on('error', (error) => this.lost(error instanceof Error ? error : new Error(String(error))))
+    worker.on('error', (error) => {
+      if (this.worker === worker) this.lost(error instanceof Error ? error : new Error(String(error)))
+    })
+    worker.on('exit', () => {
+      if (this.worker === worker) this.lost(new Error('The thread that evaluates ended.'))
+    })
     return worker
   }
 
