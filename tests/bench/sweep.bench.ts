@@ -62,7 +62,7 @@ export async function benchSweep(): Promise<BenchRow[]> {
   const { hz, lossDb } = channel.trace
   const plain = clearSweep(clear, hz, 100)
   const apart = Math.max(...plain.map((db, k) => Math.abs(db - (lossDb[k] ?? Number.NaN))))
-  if (!(apart < 1e-9)) throw new Error(`The two sweeps differ by ${apart} dB.`)
+  if (!(apart < 1e-12)) throw new Error(`The two sweeps differ by ${apart} dB.`)
   const { l0 } = budget.lines
   if (!l0) throw new Error('The link has no first line.')
   const change = (n: number) => ({
