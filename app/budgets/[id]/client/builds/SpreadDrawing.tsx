@@ -21,7 +21,7 @@ export function SpreadDrawing({ allowance }: { allowance: AllowanceEvaluation })
         <>
           <rect x={0} y={groundY} width={SPREAD.width} height={SPREAD.height - groundY} className={css.ground} />
           <path d={`M0 ${groundY}H${SPREAD.width}`} className={css.surface} />
-          <text x={SPREAD.width - 4} y={Math.min(groundY + 14, SPREAD.height - 3)} className={css.limit}>
+          <text x={2} y={Math.min(groundY + 14, SPREAD.height - 3)} className={css.limit}>
             limit
           </text>
         </>
