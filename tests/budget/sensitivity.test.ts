@@ -27,6 +27,12 @@ const only = (line: SensitiveLine) => {
 }
 
 describe('slopes against derivatives by hand', () => {
+  it('what an overlap does not hang on moves it by 0, not by −0, which JSON does not know', () => {
+    const model = formula({ length: 0.2, gap: 1 }, ({ length = nan }) => 40 * length)
+    const { perUnit, toleranceDb } = only({ ...computed('a', model, varies('gap', 1, 0.1)), sign: -1 })
+    expect([Object.is(perUnit, 0), Object.is(toleranceDb, 0)]).toEqual([true, true])
+  })
+
   it('attenuation is proportional to length', () => {
     const model = formula({ length: 0.2 }, ({ length = nan }) => 40 * length)
     expect(only(computed('a', model, varies('length', 0.2, 0.01)))).toEqual({

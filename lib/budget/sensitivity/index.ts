@@ -49,7 +49,8 @@ function ofParameters({ id, sign, computed }: SensitiveLine, hz: number, referen
   const { model, varied } = computed
   const surface = surfaceOf(model, varied, hz, reference)
   return varied.map(({ field, tolerance }, k) => {
-    const toleranceDb = sign * slopeAt(surface, varied, k)
+    // Plus 0: of an overlap that does not hang on it the product is −0, which JSON does not know.
+    const toleranceDb = sign * slopeAt(surface, varied, k) + 0
     return { line: id, input: field, perUnit: toleranceDb / tolerance, toleranceDb }
   })
 }
