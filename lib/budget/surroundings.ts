@@ -1,9 +1,7 @@
+import { COPPER_STATED_AT, copperConductivity, copperTemperature } from '../channel/materials/copper'
 import { type Conditions, holdsIn } from './corner'
-import { COPPER_STATED_AT, DRY_REFERENCE, type Surroundings } from './models/piece'
+import { DRY_REFERENCE, type Surroundings } from './models/piece'
 import type { Line, LossClass } from './schema'
-
-/** Temperature coefficient of copper's resistivity at 20 °C, 1/K (IEC 60028: 0.00393). */
-const COPPER_PER_KELVIN = 0.00393
 
 /** Models that tell the conductors' part of their loss from the dielectric's. */
 function knowsParts(line: Line): boolean {
@@ -53,10 +51,6 @@ export function surroundingsOf(
 
 /** °C at which copper is as much more resistive than at 20 °C as it is at `to` than at `from`. */
 function sameRatio(from: number, to: number): number {
-  const ratio = resistivity(to) / resistivity(from)
-  return COPPER_STATED_AT + (ratio - 1) / COPPER_PER_KELVIN
-}
-
-function resistivity(temperature: number): number {
-  return 1 + COPPER_PER_KELVIN * (temperature - COPPER_STATED_AT)
+  const conducts = copperConductivity(COPPER_STATED_AT) * (copperConductivity(to) / copperConductivity(from))
+  return copperTemperature(conducts)
 }

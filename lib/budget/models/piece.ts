@@ -1,3 +1,4 @@
+import { COPPER_STATED_AT } from '../../channel/materials/copper'
 import type { Network } from '../../channel/networks/network'
 
 /** Another way to look at a line's loss, shown beside what it counts. */
@@ -53,8 +54,5 @@ export type Surroundings = {
   readonly dfAdded: number
   readonly dkAdded: number
 }
-
-/** Copper values are stated at this temperature, °C (IACS, IEC 60028). */
-export const COPPER_STATED_AT = 20
 
 export const DRY_REFERENCE: Surroundings = { temperature: COPPER_STATED_AT, dfFactor: 1, dfAdded: 0, dkAdded: 0 }

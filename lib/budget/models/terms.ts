@@ -1,9 +1,9 @@
 import { bulkAttenuation, type CableTerms } from '../../channel/cables'
-import { copperConductivity } from '../../channel/materials/copper'
+import { COPPER_STATED_AT, copperConductivity } from '../../channel/materials/copper'
 import { formatScaled } from '../../channel/units'
 import { FREQUENCY, LOSS_PER_LENGTH } from '../quantities'
 import type { ModelInput } from './model'
-import { COPPER_STATED_AT, type Surroundings, type Values } from './piece'
+import type { Surroundings, Values } from './piece'
 
 /** Terms of an attenuation per length and the range that they hold in. */
 export type FittedTerms = { readonly values: Values; readonly from: number; readonly to: number }

@@ -1,6 +1,6 @@
-const MU0 = 4e-7 * Math.PI
-/** S/m, annealed copper at 20 °C (IACS, IEC 60028). */
-const COPPER = 5.8e7
+import { COPPER_STATED_AT, copperConductivity } from '../materials/copper'
+import { surfaceResistance } from '../materials/skinEffect'
+
 const DB_PER_NEPER = 20 / Math.LN10
 /** m. No signal layer is thicker than 2 oz/ft² of copper. */
 const THICKEST = 70e-6
@@ -22,7 +22,7 @@ const THIN_STRIP = 0.9
  * @returns dB/m
  */
 export function copperFloor(width: number, impedance: number, hz: number, thickness = THICKEST): number {
-  const surface = Math.sqrt((Math.PI * hz * MU0) / COPPER)
+  const surface = surfaceResistance(copperConductivity(COPPER_STATED_AT), hz)
   return (THIN_STRIP * DB_PER_NEPER * surface) / (2 * (width + thickness) * impedance)
 }
 
