@@ -1,7 +1,7 @@
 import { fittedLoss } from '../../../channel/fitting'
 import { propagationFromTwoLengths } from '../../../channel/fixtures'
-import { TWO_PORT } from '../../../channel/networks/network'
 import { LENGTH } from '../../quantities'
+import { knownPiece } from '../knownPiece'
 import type { ModelInput } from '../model'
 import type { Computed, Piece } from '../piece'
 import { bandWithin } from './longUniform'
@@ -39,21 +39,7 @@ export function perLengthOf(input: ModelInput): Computed | null {
   }
   const build = (metres: number): Piece => {
     const attenuation = (hz: Float64Array) => hz.map((at) => (fit.at(at) ?? Number.NaN) * metres)
-    return {
-      from: fit.hz[0] ?? 0,
-      to: fit.hz.at(-1) ?? 0,
-      reflects: false,
-      twoPort: (hz) => matched(attenuation(hz)),
-      attenuation,
-      uncertainty: 0,
-    }
+    return knownPiece({ from: fit.hz[0] ?? 0, to: fit.hz.at(-1) ?? 0, attenuation, line: null })
   }
   return { values: { length }, build: (values) => build(values.length ?? length) }
-}
-
-/** Attenuation without reflection or delay. */
-function matched(db: Float64Array): Float64Array {
-  const s = new Float64Array(TWO_PORT * db.length)
-  for (let k = 0; k < db.length; k++) s[TWO_PORT * k + 2] = s[TWO_PORT * k + 4] = 10 ** (-(db[k] as number) / 20)
-  return s
 }
