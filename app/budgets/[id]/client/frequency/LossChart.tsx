@@ -12,9 +12,8 @@ import {
   YAxis,
 } from 'recharts'
 import type { CurveEvaluation } from '../../../../../lib/budget/evaluation'
-import { plainDecibels } from '../../../../words/decibels'
 import { roundTicks } from '../trail/margins'
-import { FREQUENCY_AXIS, MARGIN, pointer, TICK, word } from './chartParts'
+import { BARE_AREA, BARE_LINE, decibelAxis, FREQUENCY_AXIS, MARGIN, pointer, READ_DOT, word } from './chartParts'
 import type { ChartRow, Frame } from './chartRows'
 import { nearestRow } from './readoutWords'
 
@@ -53,32 +52,9 @@ export default memo(function LossChart({ rows, frame, nyquist, ledge, missed, re
           </pattern>
         </defs>
         <XAxis {...FREQUENCY_AXIS} domain={[0, toGhz]} ticks={roundTicks(0, toGhz)} />
-        <YAxis
-          reversed
-          domain={[0, footDb]}
-          allowDataOverflow
-          width={40}
-          tick={TICK}
-          stroke="var(--rule-2)"
-          ticks={roundTicks(0, footDb)}
-          tickFormatter={(db: number) => plainDecibels(db)}
-        />
-        <Area
-          dataKey="cloud"
-          fill="var(--band-2)"
-          fillOpacity={1}
-          stroke="none"
-          activeDot={false}
-          isAnimationActive={false}
-        />
-        <Area
-          dataKey="ground"
-          fill="var(--ground)"
-          fillOpacity={1}
-          stroke="none"
-          activeDot={false}
-          isAnimationActive={false}
-        />
+        <YAxis reversed {...decibelAxis(footDb)} />
+        <Area dataKey="cloud" fill="var(--band-2)" fillOpacity={1} stroke="none" {...BARE_AREA} />
+        <Area dataKey="ground" fill="var(--ground)" fillOpacity={1} stroke="none" {...BARE_AREA} />
         {ledge && (
           <ReferenceArea
             ifOverflow="hidden"
@@ -122,33 +98,10 @@ export default memo(function LossChart({ rows, frame, nyquist, ledge, missed, re
           />
         )}
         {row && <ReferenceLine x={row.ghz} stroke="var(--rule-2)" />}
-        <Line
-          dataKey="limit"
-          stroke="var(--ground-ink)"
-          strokeWidth={2}
-          dot={false}
-          activeDot={false}
-          isAnimationActive={false}
-        />
-        <Line
-          dataKey="loss"
-          stroke="var(--signal)"
-          strokeWidth={2.5}
-          dot={false}
-          activeDot={false}
-          isAnimationActive={false}
-        />
-        <Line
-          dataKey="fitted"
-          stroke="var(--ink)"
-          strokeWidth={1}
-          dot={false}
-          activeDot={false}
-          isAnimationActive={false}
-        />
-        {row?.loss != null && row.loss <= footDb && (
-          <ReferenceDot x={row.ghz} y={row.loss} r={4} fill="var(--sheet)" stroke="var(--signal)" strokeWidth={2} />
-        )}
+        <Line dataKey="limit" stroke="var(--ground-ink)" strokeWidth={2} {...BARE_LINE} />
+        <Line dataKey="loss" stroke="var(--signal)" strokeWidth={2.5} {...BARE_LINE} />
+        <Line dataKey="fitted" stroke="var(--ink)" strokeWidth={1} {...BARE_LINE} />
+        {row?.loss != null && row.loss <= footDb && <ReferenceDot x={row.ghz} y={row.loss} {...READ_DOT} />}
       </ComposedChart>
     </ResponsiveContainer>
   )

@@ -10,9 +10,8 @@ import {
   XAxis,
   YAxis,
 } from 'recharts'
-import { plainDecibels } from '../../../../words/decibels'
 import { roundTicks } from '../trail/margins'
-import { FREQUENCY_AXIS, MARGIN, pointer, TICK, word } from './chartParts'
+import { BARE_LINE, decibelAxis, FREQUENCY_AXIS, MARGIN, pointer, READ_DOT, word } from './chartParts'
 import type { ChartRow } from './chartRows'
 
 type Props = {
@@ -38,15 +37,7 @@ export default memo(function ReturnChart({ rows, toGhz, nyquist, floorDb, worst,
     <ResponsiveContainer width="100%" height={150}>
       <ComposedChart data={rows} margin={MARGIN} accessibilityLayer={false} onMouseMove={pointer(onRead)}>
         <XAxis {...FREQUENCY_AXIS} domain={[0, toGhz]} ticks={roundTicks(0, toGhz)} />
-        <YAxis
-          domain={[0, TOP_DB]}
-          allowDataOverflow
-          width={40}
-          tick={TICK}
-          stroke="var(--rule-2)"
-          ticks={roundTicks(0, TOP_DB)}
-          tickFormatter={(db: number) => plainDecibels(db)}
-        />
+        <YAxis {...decibelAxis(TOP_DB)} />
         {floorDb !== null && (
           <ReferenceArea
             ifOverflow="hidden"
@@ -74,17 +65,8 @@ export default memo(function ReturnChart({ rows, toGhz, nyquist, floorDb, worst,
             label={word('missed', 'insideTopRight')}
           />
         )}
-        <Line
-          dataKey="back"
-          stroke="var(--signal)"
-          strokeWidth={2}
-          dot={false}
-          activeDot={false}
-          isAnimationActive={false}
-        />
-        {row?.back != null && row.back <= TOP_DB && (
-          <ReferenceDot x={row.ghz} y={row.back} r={4} fill="var(--sheet)" stroke="var(--signal)" strokeWidth={2} />
-        )}
+        <Line dataKey="back" stroke="var(--signal)" strokeWidth={2} {...BARE_LINE} />
+        {row?.back != null && row.back <= TOP_DB && <ReferenceDot x={row.ghz} y={row.back} {...READ_DOT} />}
       </ComposedChart>
     </ResponsiveContainer>
   )
