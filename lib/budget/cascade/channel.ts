@@ -7,7 +7,7 @@ import type { Conditions } from '../corner'
 import type { ChannelEvaluation } from '../evaluation'
 import { judgeCurve, limitsOver } from './curve'
 import { bandOf, gridOf } from './grid'
-import { isReserve, joins } from './members'
+import { isReserve, joins, type Member } from './members'
 import { finite, valueAt, worstReturn } from './overGrid'
 import { samplesOf } from './samples'
 
@@ -33,7 +33,13 @@ export function channelOf(context: Context, swept: Swept): ChannelEvaluation | n
   const { symbolRate, nyquist } = context.signalling.evaluation
   if (reference === null || symbolRate === null || nyquist === null) return null
   const counting = swept.lines.filter(({ sign }) => sign !== 0)
-  const members = counting.flatMap((line) => joins(line, swept.atHz) ?? [])
+  const members: Member[] = []
+  const outside: Counted[] = []
+  for (const line of counting) {
+    const member = joins(line, swept.atHz)
+    if (member === null) outside.push(line)
+    else members.push(member)
+  }
   const pieces = members.map(({ piece }) => piece)
   const band = bandOf(pieces, symbolRate, swept.curve?.to ?? 0)
   if (members.length === 0 || band === null) return null
@@ -45,7 +51,6 @@ export function channelOf(context: Context, swept: Swept): ChannelEvaluation | n
     hz.length,
   )
   const lossDb = insertionLoss(joined)
-  const outside = counting.filter((line) => joins(line, swept.atHz) === null)
   const lacking = outside.filter(({ item }) => !isReserve(item))
   const matched = members.filter(({ piece }) => !piece.reflects)
   const reflects = lacking.length === 0 && matched.length === 0
