@@ -1,10 +1,11 @@
+import { readsCount } from '../models'
 import { livingRecord, nameOf } from '../record'
 import type { Check } from './check'
 
 /** Fields of a line that say something the number does not follow. */
 export const lineFields: Check = function* ({ context }) {
   for (const { id, line, lossClass } of context.items) {
-    if ((line.count ?? 1) > 1 && line.model !== 'via') {
+    if ((line.count ?? 1) > 1 && !readsCount(line)) {
       yield {
         code: 'count-not-used',
         section: 'lines',

@@ -50,6 +50,11 @@ export function laneFieldsNotRead(line: Line): readonly string[] {
   return LANE_FIELDS.filter((field) => !read.includes(field))
 }
 
+/** Whether the line's model counts as many as the line says; only vias come alike in a row. */
+export function readsCount(line: Line): boolean {
+  return line.model === 'via'
+}
+
 const modelMissing: Model = ({ fields }) =>
   fields.say(
     'model-missing',
