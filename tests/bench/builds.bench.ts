@@ -2,7 +2,7 @@ import { type BuildLine, drawBuilds, responseOf } from '../../lib/budget/builds'
 import type { Computed } from '../../lib/budget/models/piece'
 import { nextUnit, streamOf } from '../../lib/channel/statistics'
 import { clearBuilds } from './clear/builds'
-import type { BenchRow } from './evaluate.bench'
+import { type BenchRow, milliseconds } from './measure'
 
 const LINES = 40
 const GEOMETRY = 13
@@ -43,16 +43,6 @@ function geometry(n: number): BuildLine {
   return { ...plain(n), group: `lot ${n % 3}`, minusDb: 0, plusDb: 0, response: of && { of, times: 1 } }
 }
 
-/** Milliseconds of one call: the median of several. */
-function milliseconds(work: () => unknown): number {
-  const times = Array.from({ length: 7 }, () => {
-    const start = performance.now()
-    work()
-    return performance.now() - start
-  })
-  return times.sort((a, b) => a - b)[3] ?? Number.NaN
-}
-
 /** Times random builds against the shortest clear version of one lane, in the same run; says the ratio and judges nothing. */
 export async function benchBuilds(): Promise<BenchRow[]> {
   const lines = Array.from({ length: LINES }, (_, n) => plain(n))
@@ -63,11 +53,11 @@ export async function benchBuilds(): Promise<BenchRow[]> {
     drawBuilds({ lines: of, lanes, limitDb: LIMIT, trials: TRIALS, seed: 1 })
   const apart = Math.abs((draw(lines, 1).fractionInside?.value ?? Number.NaN) - shortest().inside)
   if (!(apart < 0.01)) throw new Error(`The two ways of drawing differ by ${apart}.`)
-  const baseline = milliseconds(shortest)
+  const baseline = milliseconds(7, 1, shortest)
   const own = lines.map((line) => ({ ...line, group: line.id, plusDb: 0.4 }))
   const row = (what: string, work: () => unknown): BenchRow => ({
     what,
-    ours: milliseconds(work),
+    ours: milliseconds(7, 1, work),
     baseline,
     unit: 'ms',
   })

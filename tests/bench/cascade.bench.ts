@@ -1,6 +1,6 @@
 import { cascade } from '../../lib/channel/networks'
 import { clearCascade } from './clear/cascade'
-import { type BenchRow, milliseconds } from './evaluate.bench'
+import { type BenchRow, milliseconds } from './measure'
 
 const TWO_PORTS = 30
 const FREQUENCIES = 2000

@@ -1,13 +1,7 @@
 import { evaluate } from '../../lib/budget/evaluate'
 import { forgetLosses } from '../../lib/budget/lossMemory'
 import { type Budget, type BudgetFile, budgetSchema } from '../../lib/budget/schema'
-
-export type BenchRow = {
-  readonly what: string
-  readonly ours: number
-  readonly baseline: number
-  readonly unit: string
-}
+import { type BenchRow, milliseconds } from './measure'
 
 const LINES = 40
 const LANES = 256
@@ -63,17 +57,6 @@ function shortest(budget: Budget): { loss: number; rss: number; margin: number }
     if (loss > worst.loss) worst = { loss, rss: Math.hypot(...Object.values(groups)) }
   }
   return { ...worst, margin: number(budget.allowances.limit?.limit) - worst.loss }
-}
-
-/** Milliseconds of one call: the median of several rounds of many. */
-export function milliseconds(rounds: number, calls: number, work: (n: number) => unknown): number {
-  const times: number[] = []
-  for (let round = 0; round < rounds; round++) {
-    const start = performance.now()
-    for (let n = 0; n < calls; n++) work(n)
-    times.push((performance.now() - start) / calls)
-  }
-  return times.sort((a, b) => a - b)[Math.floor(rounds / 2)] ?? Number.NaN
 }
 
 /** Times evaluate() on 40 lines against the shortest clear version, in the same run; says the ratio and judges nothing. */

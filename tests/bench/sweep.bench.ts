@@ -3,7 +3,7 @@ import { evaluate } from '../../lib/budget/evaluate'
 import { forgetLosses } from '../../lib/budget/lossMemory'
 import { type Budget, type BudgetFile, budgetSchema } from '../../lib/budget/schema'
 import { type ClearPiece, clearSweep } from './clear/sweep'
-import { type BenchRow, milliseconds } from './evaluate.bench'
+import { type BenchRow, milliseconds } from './measure'
 
 const LINES = 40
 const SWEEP = { sweep: true, builds: 0 }

@@ -1,6 +1,6 @@
 import { readTouchstone } from '../../lib/channel/touchstone'
 import { readClearly } from './clear/touchstone'
-import { type BenchRow, milliseconds } from './evaluate.bench'
+import { type BenchRow, milliseconds } from './measure'
 
 const POINTS = 10_000
 const PORTS = 4
