@@ -3,6 +3,7 @@ import { evaluate, WHOLE } from '../../lib/budget/evaluate'
 import type { EvidenceData } from '../../lib/budget/evaluation'
 import { tracePiece } from '../../lib/budget/models/geometryPiece'
 import type { BudgetFile } from '../../lib/budget/schema'
+import { STRIPLINE } from './crossSections'
 import { line, link } from './links'
 import { attenuator, constantly, evidenceOf, fileLine, GRID } from './sections'
 
@@ -29,24 +30,6 @@ const only = (one: LineFile, corner: Partial<CornerFile>) => {
   return { cold: cold.lossDb ?? Number.NaN, hot: hot.lossDb ?? Number.NaN, in: hot, before: cold }
 }
 
-/** A stripline of 5 mil between planes 5 mil away; smooth copper unless said otherwise. */
-const TRACE = {
-  order: 'a1',
-  kind: 'trace',
-  model: 'geometry',
-  basis: 'estimate',
-  structure: 'stripline',
-  length: '5 in',
-  width: '5 mil',
-  thickness: '0.6 mil',
-  heightBelow: '5 mil',
-  heightAbove: '5 mil',
-  dk: '3.6',
-  df: '0.006',
-  anchor: '10 GHz',
-  roughness: 'smooth',
-} as const satisfies LineFile
-
 /** 1 + 0.00393 (T − 20) (IEC 60028). */
 const resistivity = (celsius: number) => 1 + 0.00393 * (celsius - 20)
 const skinDepth = (hz: number, celsius: number) =>
@@ -65,7 +48,7 @@ const METRES = 5 * 0.0254
 const SLOWER = 0.006
 
 describe('the copper of a cross-section in a corner', () => {
-  const lossless = { ...TRACE, df: '0' }
+  const lossless = { ...STRIPLINE, df: '0' }
 
   it('smooth: grows with the root of the resistivity, √(1.17685/1.01965) from 25 to 65 °C', () => {
     const { cold, hot } = only(lossless, { temperature: '65 °C' })
@@ -84,7 +67,7 @@ describe('the copper of a cross-section in a corner', () => {
   })
 
   it('is the model asked at 65 °C by hand', () => {
-    const { cold, hot } = only(TRACE, { temperature: '65 °C', dielectricPerKelvin: '0.2 %/K' })
+    const { cold, hot } = only(STRIPLINE, { temperature: '65 °C', dielectricPerKelvin: '0.2 %/K' })
     const mil = 25.4e-6
     const values = {
       length: METRES,
@@ -115,7 +98,7 @@ describe('the copper of a cross-section in a corner', () => {
   })
 
   it('does not move a line that holds at 65 °C already', () => {
-    const held = { ...TRACE, conditionTemperature: '65 °C' }
+    const held = { ...STRIPLINE, conditionTemperature: '65 °C' }
     const { cold, hot, in: corner } = only(held, { temperature: '65 °C', dielectricPerKelvin: '0.2 %/K' })
     expect(hot).toBe(cold)
     expect(corner.judged).toMatchObject({ movedDb: 0, unmovedDb: 0 })
@@ -125,48 +108,48 @@ describe('the copper of a cross-section in a corner', () => {
 
 describe('the dielectric of a cross-section in a corner (π f √εr tan δ/c, by hand)', () => {
   it('grows by the typed coefficient of the loss tangent over 40 K', () => {
-    const { hot } = only(TRACE, { temperature: '65 °C', dielectricPerKelvin: '0.25 %/K' })
-    const copper = only(TRACE, { temperature: '65 °C', dielectricPerKelvin: '0 %/K' })
+    const { hot } = only(STRIPLINE, { temperature: '65 °C', dielectricPerKelvin: '0.25 %/K' })
+    const copper = only(STRIPLINE, { temperature: '65 °C', dielectricPerKelvin: '0 %/K' })
     expect(Math.abs((hot - copper.hot) / (dielectricDb(3.6, 0.006, METRES) * 0.0025 * 40) - 1)).toBeLessThan(SLOWER)
   })
 
   it('that says nothing of it is told to move the copper only', () => {
-    const silent = only(TRACE, { temperature: '65 °C' })
+    const silent = only(STRIPLINE, { temperature: '65 °C' })
     expect(silent.in.codes).toContain('corner-does-not-move l')
     expect(silent.in.judged.movedDb).toBeCloseTo(silent.hot - silent.cold, 10)
     expect(silent.in.judged.unmovedDb).toBe(0)
-    expect(only(TRACE, { temperature: '65 °C', dielectricPerKelvin: '0 %/K' }).in.codes).not.toContain(
+    expect(only(STRIPLINE, { temperature: '65 °C', dielectricPerKelvin: '0 %/K' }).in.codes).not.toContain(
       'corner-does-not-move l',
     )
   })
 
   it('typed loss per kelvin counts alone where it alone is typed; beside the coefficient of the loss tangent it does not', () => {
-    const typed = only(TRACE, { temperature: '65 °C', lossPerKelvin: '0.12 %/K' })
+    const typed = only(STRIPLINE, { temperature: '65 °C', lossPerKelvin: '0.12 %/K' })
     expect(typed.hot / typed.cold).toBeCloseTo(1 + 0.0012 * 40, 10)
-    const computed = only(TRACE, { temperature: '65 °C', dielectricPerKelvin: '0.2 %/K' })
+    const computed = only(STRIPLINE, { temperature: '65 °C', dielectricPerKelvin: '0.2 %/K' })
     const both = { temperature: '65 °C', lossPerKelvin: '0.12 %/K', dielectricPerKelvin: '0.2 %/K' }
-    expect(only(TRACE, both).hot).toBeCloseTo(computed.hot, 12)
+    expect(only(STRIPLINE, both).hot).toBeCloseTo(computed.hot, 12)
   })
 
   it('wet: Df and Dk grow by what is typed, so it is the same line with these values', () => {
-    const wet = only(TRACE, { humidity: 'wet', wetDf: '0.0018', wetDk: '0.05' })
-    expect(wet.hot).toBeCloseTo(only({ ...TRACE, df: '0.0078', dk: '3.65' }, {}).cold, 10)
-    const moist = only(TRACE, { humidity: 'wet', wetDf: '0.0018' })
+    const wet = only(STRIPLINE, { humidity: 'wet', wetDf: '0.0018', wetDk: '0.05' })
+    expect(wet.hot).toBeCloseTo(only({ ...STRIPLINE, df: '0.0078', dk: '3.65' }, {}).cold, 10)
+    const moist = only(STRIPLINE, { humidity: 'wet', wetDf: '0.0018' })
     expect(Math.abs((moist.hot - moist.cold) / dielectricDb(3.6, 0.0018, METRES) - 1)).toBeLessThan(SLOWER)
-    const held = only({ ...TRACE, conditionHumidity: 'wet' }, { humidity: 'wet', wetDf: '0.0018' })
+    const held = only({ ...STRIPLINE, conditionHumidity: 'wet' }, { humidity: 'wet', wetDf: '0.0018' })
     expect(held.hot).toBe(held.cold)
   })
 
   it('wet and hot: the loss tangent grows, then moisture is added', () => {
     const both = { temperature: '65 °C', humidity: 'wet', dielectricPerKelvin: '0.25 %/K', wetDf: '0.0018' } as const
-    const same = { ...TRACE, df: String(0.006 * 1.1 + 0.0018), conditionTemperature: '65 °C' }
-    expect(only(TRACE, both).hot).toBeCloseTo(only(same, {}).cold, 8)
+    const same = { ...STRIPLINE, df: String(0.006 * 1.1 + 0.0018), conditionTemperature: '65 °C' }
+    expect(only(STRIPLINE, both).hot).toBeCloseTo(only(same, {}).cold, 8)
   })
 
   it('wet without Df or Dk takes the typed growth of trace loss', () => {
-    const wet = only(TRACE, { humidity: 'wet', lossWet: '4 %' })
+    const wet = only(STRIPLINE, { humidity: 'wet', lossWet: '4 %' })
     expect(wet.hot / wet.cold).toBeCloseTo(1.04, 10)
-    expect(only(TRACE, { humidity: 'wet' }).in.words).toMatch(/^undecided: the corner 'Hot' is wet/)
+    expect(only(STRIPLINE, { humidity: 'wet' }).in.words).toMatch(/^undecided: the corner 'Hot' is wet/)
   })
 })
 
@@ -217,7 +200,7 @@ describe('√f and f terms in a corner (by hand)', () => {
     const cold = { temperature: '0 °C', dielectricPerKelvin: '0.3 %/K' }
     expect(only(TERMS, cold).hot).toBeLessThan(root + linear - 0.1)
     expect(only({ ...TERMS, grade: 'maximum' }, cold).hot).toBeCloseTo(root + linear, 12)
-    const geometry = only({ ...TRACE, grade: 'maximum' }, cold)
+    const geometry = only({ ...STRIPLINE, grade: 'maximum' }, cold)
     expect(geometry.hot).toBe(geometry.cold)
   })
 })
@@ -245,7 +228,7 @@ describe('an extreme of fabrication', () => {
 
   it('takes 3σ of what is given in σ, and all of what varies inside a model', () => {
     expect(only({ ...STATED, toleranceMeaning: '1-sigma' }, { fabrication: 'high-loss' }).hot).toBeCloseTo(6.5, 12)
-    const varying = { ...TRACE, toleranceMinus: '0 dB', tolerancePlus: '0 dB', varies: 'length 10 %' }
+    const varying = { ...STRIPLINE, toleranceMinus: '0 dB', tolerancePlus: '0 dB', varies: 'length 10 %' }
     const { cold, hot } = only(varying, { fabrication: 'high-loss' })
     expect(hot / cold).toBeCloseTo(1.1, 9)
   })

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { evaluate } from '../../lib/budget/evaluate'
 import { FLAGS, type FlagCode } from '../../lib/budget/flags'
 import type { BudgetFile } from '../../lib/budget/schema'
+import { PAIR } from './crossSections'
 import { line, link } from './links'
 
 const { head, allowances, planes: ends } = link({})
@@ -34,15 +35,15 @@ const ELSEWHERE = {
   'evidence-unreadable': 'network',
   'port-map-missing': 'network',
   'port-map-unreadable': 'network',
-  'fixtures-not-removed': 'network',
-  'not-fitted': 'network',
+  'fixtures-not-removed': 'networkLong',
+  'not-fitted': 'networkLong',
   'modes-missing': 'network',
   'port-map-guessed': 'network',
   'port-map-doubtful': 'network',
   'not-passive': 'network',
   'coarse-file': 'network',
-  'fit-differs': 'network',
-  'fixtures-differ': 'network',
+  'fit-differs': 'networkLong',
+  'fixtures-differ': 'networkLong',
   'cascade-differs': 'cascade',
 } as const satisfies Partial<Record<FlagCode, string>>
 
@@ -51,25 +52,6 @@ const file = (rest: object) => ({
 })
 const via = { kind: 'via', boardThickness: '3 mm', usedDepth: '1 mm', stub: '1 mm' } as const
 const perLength = { ...trace, model: 'per-length', length: '3 in' } as const
-const computed = {
-  ...trace,
-  model: 'geometry',
-  structure: 'coupled-stripline',
-  length: '5 in',
-  width: '5 mil',
-  gap: '6 mil',
-  thickness: '0.6 mil',
-  heightBelow: '6 mil',
-  heightAbove: '6 mil',
-  dk: '3.6',
-  df: '0.004',
-  anchor: '10 GHz',
-  method: 'resonator',
-  resin: '55 %',
-  roughness: 'cannonball',
-  roughnessTop: '2 µm',
-  roughnessBottom: '2 µm',
-} as const
 const board = { assemblies: { b: { order: 'a0', name: 'Board' } } }
 const lossClass = (order: string, layer: string, rest: object = {}) => ({
   order,
@@ -121,7 +103,7 @@ const RAISED: Readonly<
     'a',
     'conditionTemperature',
   ],
-  'varies-beyond-model': [a({ ...computed, varies: 'gap 6 mil' }), 'lines', 'a', 'varies'],
+  'varies-beyond-model': [a({ ...PAIR, varies: 'gap 6 mil' }), 'lines', 'a', 'varies'],
   'skew-too-large': [a({ skew: '60 ps' }), 'lines', 'a', 'skew'],
   'overlap-unnamed': [a({ kind: 'overlap' }), 'lines', 'a', 'overlapA'],
   'limit-missing': [judged({ limit: null }), 'allowances', 'limit', 'limit'],
@@ -227,9 +209,9 @@ const RAISED: Readonly<
   ],
   'per-length-unusual': [a({ ...perLength, lossPerLength: '2000 dB/m' }), 'lines', 'a', 'lossPerLength'],
   'unit-suspected': [a({ ...perLength, lossPerLength: '0.9 dB/m' }), 'lines', 'a', 'lossPerLength'],
-  'anchor-far': [a({ ...computed, anchor: '1 GHz' }), 'lines', 'a', 'anchor'],
-  'smooth-copper': [a({ ...computed, roughness: 'smooth' }), 'lines', 'a', 'roughness'],
-  'laminate-unproven': [a({ ...computed, method: null }), 'lines', 'a', 'method'],
+  'anchor-far': [a({ ...PAIR, anchor: '1 GHz' }), 'lines', 'a', 'anchor'],
+  'smooth-copper': [a({ ...PAIR, roughness: 'smooth' }), 'lines', 'a', 'roughness'],
+  'laminate-unproven': [a({ ...PAIR, method: null }), 'lines', 'a', 'method'],
   'model-below-coupon': [
     {
       ...board,

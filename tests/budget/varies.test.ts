@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { evaluate } from '../../lib/budget/evaluate'
 import type { AllowanceEvaluation } from '../../lib/budget/evaluation'
 import type { BudgetFile } from '../../lib/budget/schema'
+import { STRIPLINE } from './crossSections'
 import { line, link } from './links'
 
 type LineFile = NonNullable<BudgetFile['lines']>[string]
@@ -33,23 +34,6 @@ function normal(z: number): number {
 /** Four standard errors of a share of so many builds. */
 const fourErrors = (share: number, trials: number) => 4 * Math.sqrt((share * (1 - share)) / trials)
 
-const GEOMETRY = {
-  order: 'a1',
-  kind: 'trace',
-  model: 'geometry',
-  basis: 'estimate',
-  structure: 'stripline',
-  length: '5 in',
-  width: '5 mil',
-  thickness: '0.6 mil',
-  heightBelow: '5 mil',
-  heightAbove: '5 mil',
-  dk: '3.6',
-  df: '0.006',
-  anchor: '10 GHz',
-  roughness: 'smooth',
-} as const satisfies LineFile
-
 /** Loss is its length times 0.5 dB/in at 10 GHz, so that everything is linear. */
 const LINEAR = {
   order: 'a1',
@@ -65,23 +49,23 @@ const LINEAR = {
 
 describe('the tolerance of a computed line', () => {
   it('is ±15 % of a cross-section’s loss, until it is scaled by a coupon or a tolerance is typed', () => {
-    const plain = judge({ l: GEOMETRY }, '100 dB')
+    const plain = judge({ l: STRIPLINE }, '100 dB')
     const db = plain.nominalDb ?? Number.NaN
     expect([plain.worstDb, plain.rssDb]).toEqual([expect.closeTo(1.15 * db, 10), expect.closeTo(0.15 * db, 10)])
-    const scaled = judge({ l: { ...GEOMETRY, scale: '1.1' } }, '100 dB')
+    const scaled = judge({ l: { ...STRIPLINE, scale: '1.1' } }, '100 dB')
     expect(scaled.nominalDb).toBeCloseTo(1.1 * db, 10)
     expect([scaled.worstDb, scaled.rssDb]).toEqual([scaled.nominalDb, 0])
-    const typed = judge({ l: { ...GEOMETRY, tolerancePlus: '0.2 dB' } }, '100 dB')
+    const typed = judge({ l: { ...STRIPLINE, tolerancePlus: '0.2 dB' } }, '100 dB')
     expect([typed.worstDb, typed.rssDb]).toEqual([expect.closeTo(db + 0.2, 10), expect.closeTo(0.2, 10)])
-    const zero = judge({ l: { ...GEOMETRY, tolerancePlus: '0 dB' } }, '100 dB')
+    const zero = judge({ l: { ...STRIPLINE, tolerancePlus: '0 dB' } }, '100 dB')
     expect(zero.worstDb).toBeCloseTo(db, 12)
   })
 
   it('in a corner is of the grown loss', () => {
     const corners = { hot: { order: 'a0', name: 'Hot', temperature: '65 °C', lossPerKelvin: '0.1 %/K' } }
     const limit = { ...link({}).allowances.limit, order: 'a0', limit: '100 dB', judgedCorner: 'hot' }
-    const cold = judge({ l: GEOMETRY }, '100 dB').nominalDb ?? Number.NaN
-    const hot = judge({ l: GEOMETRY }, '100 dB', { corners, allowances: { limit } })
+    const cold = judge({ l: STRIPLINE }, '100 dB').nominalDb ?? Number.NaN
+    const hot = judge({ l: STRIPLINE }, '100 dB', { corners, allowances: { limit } })
     expect(hot.nominalDb).toBeCloseTo(1.04 * cold, 10)
     expect(hot.rssDb).toBeCloseTo(0.15 * 1.04 * cold, 10)
   })

@@ -1,30 +1,10 @@
 import { describe, expect, it } from 'vitest'
 import { copperFloor } from '../../../lib/channel/lines/copperFloor'
+import { PAIR } from '../crossSections'
 import { line } from '../links'
 import { evaluated, flagged, words } from './flagged'
 
-const geometry = (rest: object = {}) =>
-  line('a1', null, {
-    kind: 'trace',
-    model: 'geometry',
-    at: null,
-    structure: 'coupled-stripline',
-    length: '5 in',
-    width: '5 mil',
-    gap: '6 mil',
-    thickness: '0.6 mil',
-    heightBelow: '6 mil',
-    heightAbove: '6 mil',
-    dk: '3.6',
-    df: '0.004',
-    anchor: '10 GHz',
-    method: 'split-post resonator',
-    resin: '55 %',
-    roughness: 'cannonball',
-    roughnessTop: '2 µm',
-    roughnessBottom: '2 µm',
-    ...rest,
-  })
+const geometry = (rest: object = {}) => line('a1', null, { ...PAIR, ...rest })
 const one = (rest: object) => ({ lines: { g: geometry(rest) } })
 
 describe('mistake 7: Dk and Df far from Nyquist, smooth and dry, models kinder than their coupon (practice A11; common practice, no source)', () => {
