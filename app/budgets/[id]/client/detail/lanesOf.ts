@@ -1,7 +1,6 @@
 import { type Budget, LANE_FIELDS } from '../../../../../lib/budget/schema'
 
-export type LaneField = (typeof LANE_FIELDS)[number]
-export type LaneValue = { readonly lane: number; readonly field: LaneField; readonly value: string }
+type LaneField = (typeof LANE_FIELDS)[number]
 
 /** The values that single lanes have of their own for a line, by field and lane. Cleared ones are not among them. */
 export function laneValuesOf(budget: Budget, line: string): ReadonlyMap<LaneField, ReadonlyMap<number, string>> {
